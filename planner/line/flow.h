@@ -15,14 +15,14 @@ namespace lossline {
 
 /// The resolved stream. SI; moisture dry basis.
 struct ProductFlow {
-  double dry_solids = 0;       ///< [kg/s]
-  double feed = 0;             ///< wet product in [kg/s]
-  double speed = 0;            ///< belt [m/s]
-  double width = 0;            ///< loaded width [m]
-  double depth = 0;            ///< at feed moisture [m]
-  double coverage = 1;         ///< share of width x length really covered, 0..1
-  double dry_areal_mass = 0;   ///< dry solid per covered area [kg/m2]
-  double dry_density = 0;      ///< dry solid per bed or piece volume at feed moisture [kg/m3]
+  double dry_solids = 0;      ///< [kg/s]
+  double feed = 0;            ///< wet product in [kg/s]
+  double speed = 0;           ///< belt [m/s]
+  double width = 0;           ///< loaded width [m]
+  double depth = 0;           ///< at feed moisture [m]
+  double coverage = 1;        ///< share of width x length really covered, 0..1
+  double dry_areal_mass = 0;  ///< dry solid per covered area [kg/m2]
+  double dry_density = 0;     ///< dry solid per bed or piece volume at feed moisture [kg/m3]
 };
 
 /// A contradiction or gap among the inputs, in terms of line-file keys.

@@ -14,17 +14,17 @@ namespace lossline {
 /// What the line must achieve.
 struct Duty {
   /// At most one rate is given; the others follow (planner/line/flow.h). All [kg/s].
-  std::optional<double> feed_rate;        ///< wet product in
-  std::optional<double> product_rate;     ///< product out at the target moisture
-  std::optional<double> dry_solids_rate;  ///< dry solids
-  double feed_moisture = 0;               ///< dry basis
-  double feed_temperature = 293.15;       ///< [K]
-  double feed_cure = 0;                   ///< degree of cure on entry, 0..1
-  std::optional<double> target_moisture;  ///< dry basis
+  std::optional<double> feed_rate;           ///< wet product in
+  std::optional<double> product_rate;        ///< product out at the target moisture
+  std::optional<double> dry_solids_rate;     ///< dry solids
+  double feed_moisture = 0;                  ///< dry basis
+  double feed_temperature = 293.15;          ///< [K]
+  double feed_cure = 0;                      ///< degree of cure on entry, 0..1
+  std::optional<double> target_moisture;     ///< dry basis
   std::optional<double> moisture_tolerance;  ///< +- around the target, dry basis
-  std::optional<double> target_cure;      ///< least degree of cure on exit, 0..1
-  std::optional<double> hours_per_year;   ///< [s] of operation per year
-  std::string country;                    ///< free text, for band legality; may be empty
+  std::optional<double> target_cure;         ///< least degree of cure on exit, 0..1
+  std::optional<double> hours_per_year;      ///< [s] of operation per year
+  std::string country;                       ///< free text, for band legality; may be empty
 };
 
 /// How the product lies on the belt.
@@ -40,12 +40,12 @@ struct Product {
   std::string material;  ///< id in the materials database
   ProductKind kind = ProductKind::granular_bed;
   ProductOverrides overrides;
-  bool contains_metal = false;      ///< wires, staples, chills, tramp metal expected
-  bool combustible = false;         ///< product, dust or deposits burn
-  bool dusty = false;               ///< fines that can form a cloud
-  bool food = false;                ///< hygiene caution
-  std::string flammable_vapour;     ///< name of a solvent given off; empty = none
-  bool fumes = false;               ///< toxic or nuisance fumes (resin, rubber, wash)
+  bool contains_metal = false;   ///< wires, staples, chills, tramp metal expected
+  bool combustible = false;      ///< product, dust or deposits burn
+  bool dusty = false;            ///< fines that can form a cloud
+  bool food = false;             ///< hygiene caution
+  std::string flammable_vapour;  ///< name of a solvent given off; empty = none
+  bool fumes = false;            ///< toxic or nuisance fumes (resin, rubber, wash)
 };
 
 /// How much product lies where. Exactly the members its kind needs are given; flow.h derives the
@@ -69,12 +69,12 @@ struct Feed {
 
 /// The belt.
 struct Belt {
-  std::optional<double> speed;  ///< [m/s]; may follow from the duty
-  double width = 0;             ///< [m]
-  double thickness = 3e-3;      ///< [m]
+  std::optional<double> speed;           ///< [m/s]; may follow from the duty
+  double width = 0;                      ///< [m]
+  double thickness = 3e-3;               ///< [m]
   std::complex<double> eps{2.6, -0.01};  ///< relative permittivity
   Provenance eps_provenance;
-  double open_share = 0;        ///< perforation, open area over area, 0..1
+  double open_share = 0;  ///< perforation, open area over area, 0..1
 };
 
 /// Cross section of a passage the field can travel through.
@@ -86,11 +86,11 @@ struct Opening {
 /// What guards an open end of the tunnel. The reflective part stands next to the cavity.
 struct EndTrap {
   std::string name;
-  Opening opening;                   ///< clear passage for the product
-  double length = 0;                 ///< [m]
+  Opening opening;                    ///< clear passage for the product
+  double length = 0;                  ///< [m]
   double reflective_attenuation = 0;  ///< sends back [dB]
   double absorbing_attenuation = 0;   ///< takes [dB]
-  std::string guaranteed_by;         ///< who guarantees the attenuation with product in place
+  std::string guaranteed_by;          ///< who guarantees the attenuation with product in place
 };
 
 enum class StretchKind { microwave, air, rest, cooling };
@@ -107,24 +107,24 @@ struct Stretch {
   double heat_transfer_belt = 0;
 
   // Microwave stretches only.
-  double width = 0;    ///< inside, across the belt [m]
-  double height = 0;   ///< inside [m]
-  double belt_height_share = 0.5;      ///< height of the belt over inside height
-  double wall_resistivity = 7.2e-7;    ///< [ohm m]; default stainless steel 304
+  double width = 0;                  ///< inside, across the belt [m]
+  double height = 0;                 ///< inside [m]
+  double belt_height_share = 0.5;    ///< height of the belt over inside height
+  double wall_resistivity = 7.2e-7;  ///< [ohm m]; default stainless steel 304
   double wall_relative_permeability = 1;
-  double wall_roughness_factor = 1;    ///< multiplies the smooth-wall loss
-  double mixing = 0;                   ///< s of the angle-class balance: 0 smooth box, 0.05..0.3 ribs
-  int launchers = 1;                   ///< openings through which power enters
-  std::optional<Opening> passage;      ///< cross section towards its neighbours; default the trap's
+  double wall_roughness_factor = 1;  ///< multiplies the smooth-wall loss
+  double mixing = 0;                 ///< s of the angle-class balance: 0 smooth box, 0.05..0.3 ribs
+  int launchers = 1;                 ///< openings through which power enters
+  std::optional<Opening> passage;    ///< cross section towards its neighbours; default the trap's
 };
 
 /// The waveguide run between a generator and its launchers.
 struct Run {
-  double width = 0;          ///< inside broad side [m]; 0 = no run given
-  double height = 0;         ///< inside narrow side [m]
-  double length = 0;         ///< [m]
+  double width = 0;              ///< inside broad side [m]; 0 = no run given
+  double height = 0;             ///< inside narrow side [m]
+  double length = 0;             ///< [m]
   double resistivity = 2.62e-8;  ///< [ohm m]; default aluminium 3.816e7 S/m
-  double excess_factor = 1;  ///< bends, joints, roughness over the smooth-wall loss, >= 1
+  double excess_factor = 1;      ///< bends, joints, roughness over the smooth-wall loss, >= 1
 };
 
 /// A share of a generator's power and the stretch it goes to.
@@ -136,14 +136,14 @@ struct FeedBranch {
 /// A generator with its run and the stretches it feeds.
 struct Generator {
   std::string name;
-  double frequency = 0;          ///< [Hz]
-  double rated = 0;              ///< output at the flange [W]
-  double set_point = 0;          ///< output now [W], 0..rated
-  double minimum_stable = 0;     ///< least output it can hold [W]
-  double tube_efficiency = 0;    ///< microwave out over anode power in, 0..1
-  double supply_efficiency = 0;  ///< anode power over mains, 0..1
+  double frequency = 0;                   ///< [Hz]
+  double rated = 0;                       ///< output at the flange [W]
+  double set_point = 0;                   ///< output now [W], 0..rated
+  double minimum_stable = 0;              ///< least output it can hold [W]
+  double tube_efficiency = 0;             ///< microwave out over anode power in, 0..1
+  double supply_efficiency = 0;           ///< anode power over mains, 0..1
   std::optional<double> reflected_limit;  ///< highest reflected power over output, 0..1
-  double launcher_reflection = 0;  ///< power sent back at the launcher itself, 0..1
+  double launcher_reflection = 0;         ///< power sent back at the launcher itself, 0..1
   Run run;
   std::vector<FeedBranch> feeds;
 };
@@ -170,9 +170,9 @@ struct AirLoop {
   double recycle = 0;                        ///< exhaust led back to the mixer, share 0..<1
   std::string takes_from;                    ///< loop whose exhaust is this one's fresh air
   HeatSource heat_source = HeatSource::electric;
-  double heater_efficiency = 1;              ///< heat to air over energy bought, 0..1
-  double fan_power = 0;                      ///< mains [W]
-  double shell_conductance = 0;              ///< loop's duct and hood to the room [W/K]
+  double heater_efficiency = 1;               ///< heat to air over energy bought, 0..1
+  double fan_power = 0;                       ///< mains [W]
+  double shell_conductance = 0;               ///< loop's duct and hood to the room [W/K]
   std::optional<double> piece_heat_transfer;  ///< film inside a granular bed [W/(m2 K)]
 };
 
@@ -185,18 +185,18 @@ struct Surface {
 
 /// Limits the line must keep, beyond those of the product card.
 struct Limits {
-  std::optional<double> product_temperature;    ///< highest anywhere [K]
-  std::optional<double> heating_rate;           ///< highest [K/s]
+  std::optional<double> product_temperature;          ///< highest anywhere [K]
+  std::optional<double> heating_rate;                 ///< highest [K/s]
   std::optional<double> heating_rate_above_moisture;  ///< the heating rate binds above this X
-  std::optional<double> drying_rate;            ///< highest -dX/dt [1/s]
-  std::optional<double> moisture_low;           ///< lowest final, dry basis
-  std::optional<double> moisture_high;          ///< highest final, dry basis
-  std::optional<double> specific_power;         ///< highest heat per wet mass [W/kg]
-  std::optional<double> areal_power;            ///< highest heat per belt area [W/m2]
-  std::optional<double> dew_point_margin;       ///< least, at every named surface [K]
-  std::optional<double> overpressure;           ///< highest inside the product [Pa]
-  std::optional<double> cure_high;              ///< highest degree of cure
-  std::optional<double> field_strength;         ///< highest rms field in a cavity [V/m]
+  std::optional<double> drying_rate;                  ///< highest -dX/dt [1/s]
+  std::optional<double> moisture_low;                 ///< lowest final, dry basis
+  std::optional<double> moisture_high;                ///< highest final, dry basis
+  std::optional<double> specific_power;               ///< highest heat per wet mass [W/kg]
+  std::optional<double> areal_power;                  ///< highest heat per belt area [W/m2]
+  std::optional<double> dew_point_margin;             ///< least, at every named surface [K]
+  std::optional<double> overpressure;                 ///< highest inside the product [Pa]
+  std::optional<double> cure_high;                    ///< highest degree of cure
+  std::optional<double> field_strength;               ///< highest rms field in a cavity [V/m]
 };
 
 /// How the power reaches the product.
@@ -222,9 +222,9 @@ struct Prices {
 struct Line {
   std::string name;
   std::string note;
-  double pressure = 101'325.0;          ///< in the tunnel [Pa]
-  double room_temperature = 293.15;     ///< [K]
-  double room_humidity = 0.008;         ///< [kg/kg dry air]
+  double pressure = 101'325.0;       ///< in the tunnel [Pa]
+  double room_temperature = 293.15;  ///< [K]
+  double room_humidity = 0.008;      ///< [kg/kg dry air]
   Duty duty;
   Product product;
   Belt belt;

@@ -22,18 +22,18 @@ struct TopologyProblem {
 struct AirCycle {
   std::vector<std::size_t> loops;    ///< indices into Line::air, in solving order
   std::vector<std::string> members;  ///< node names along the cycle, for messages
-  std::string tear;                  ///< the stream that is guessed and iterated, "main: exhaust -> mixer"
+  std::string tear;  ///< the stream that is guessed and iterated, "main: exhaust -> mixer"
 };
 
 /// The structure of a line.
 struct Topology {
-  std::vector<std::size_t> cavities;               ///< microwave stretches, in belt order
-  std::vector<std::vector<std::size_t>> feeders;   ///< per cavity: indices of generators
+  std::vector<std::size_t> cavities;                     ///< microwave stretches, in belt order
+  std::vector<std::vector<std::size_t>> feeders;         ///< per cavity: indices of generators
   std::vector<std::vector<std::size_t>> loop_stretches;  ///< per air loop: stretches, belt order
-  std::vector<std::size_t> loop_order;             ///< air loops, suppliers first
-  std::vector<AirCycle> cycles;                    ///< recycles and loops feeding each other
-  std::vector<std::string> open_paths;             ///< "cavity 2 -> rest 1 -> room (outlet)"
-  std::vector<TopologyProblem> problems;           ///< empty for a sound line
+  std::vector<std::size_t> loop_order;                   ///< air loops, suppliers first
+  std::vector<AirCycle> cycles;                          ///< recycles and loops feeding each other
+  std::vector<std::string> open_paths;                   ///< "cavity 2 -> rest 1 -> room (outlet)"
+  std::vector<TopologyProblem> problems;                 ///< empty for a sound line
 };
 
 /// Builds the graph of a line and reads its structure off it.
