@@ -62,8 +62,8 @@ BedMaterial bed_material(const Line& line, const ProductCard& card, const Produc
   const double X_feed = line.duty.feed_moisture;
   out.dry_density = flow.dry_density * (1 + out.shrinkage * X_feed);
 
-  out.conductivity = known_or(card.conductivity, assumed::conductivity, "conductivity", "W/(m K)",
-                              assumptions);
+  out.conductivity =
+      known_or(card.conductivity, assumed::conductivity, "conductivity", "W/(m K)", assumptions);
   if (card.conductivity_slope)
     out.conductivity_slope = card.conductivity_slope->value;
   else if (!card.conductivity)

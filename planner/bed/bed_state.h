@@ -37,8 +37,7 @@ inline double enthalpy(const BedMaterial& material, double T, double X, double a
 template <class S>
 S temperature(const BedMaterial& material, const S& E, const S& X, const S& alpha) {
   using std::sqrt;
-  const S heat =
-      E + bound_heat(*material.sorption, X) - material.heat_of_reaction * (1.0 - alpha);
+  const S heat = E + bound_heat(*material.sorption, X) - material.heat_of_reaction * (1.0 - alpha);
   const S capacity = material.heat_capacity + water::liquid_heat_capacity * X;
   if (material.heat_capacity_slope == 0) return celsius_zero + heat / capacity;
   // slope/2 t^2 + capacity t = heat, the root that is continuous through slope = 0

@@ -119,12 +119,12 @@ numerics::Dual<N> solved_surface(const product::Sorption& sorption,
                                  const SurfaceBalance<numerics::Dual<N>>& b) {
   using D = numerics::Dual<N>;
   double slope = 0;
-  const double Xs = surface_moisture(
-      sorption,
-      SurfaceBalance<double>{b.liquid.value, b.vapour.value, b.psi_mean.value, b.outside.value,
-                             b.potential_air.value, b.X.value, b.T.value, b.psat.value, b.P,
-                             b.through},
-      slope);
+  const double Xs =
+      surface_moisture(sorption,
+                       SurfaceBalance<double>{b.liquid.value, b.vapour.value, b.psi_mean.value,
+                                              b.outside.value, b.potential_air.value, b.X.value,
+                                              b.T.value, b.psat.value, b.P, b.through},
+                       slope);
   D residual = b.template residual<D>(D(Xs), activity(sorption, D(Xs), b.T) * b.psat);
   residual.value = 0;
   return D(Xs) - residual / slope;
@@ -183,7 +183,8 @@ Exchange<S> surface_exchange(const BedMaterial& material, const Surroundings& ar
   S conductance(0.0);
   if (around.heat_top > 0)
     conductance = conductance + top_side / (1.0 / around.heat_top + per_face / k3);
-  if (around.heat_belt > 0) conductance = conductance + 1.0 / (1.0 / around.heat_belt + per_face / k3);
+  if (around.heat_belt > 0)
+    conductance = conductance + 1.0 / (1.0 / around.heat_belt + per_face / k3);
   out.heat = conductance * (air_T - T);
   out.enthalpy = out.water * water::vapour_enthalpy(T) - out.heat;
   return out;

@@ -92,8 +92,8 @@ S pressure_flow(const BedMaterial& material, const S& X, const S& T, const S& ov
 template <class S>
 S liquid_diffusivity(const BedMaterial& material, const S& X, const S& T) {
   using std::exp;
-  const S arrhenius = exp(-1.0 * (material.diffusivity_activation / gas_constant) *
-                          (1.0 / T - 1.0 / 298.15));
+  const S arrhenius =
+      exp(-1.0 * (material.diffusivity_activation / gas_constant) * (1.0 / T - 1.0 / 298.15));
   const double half = material.diffusivity_half_moisture;
   const S wet = numerics::plain(X) > 0 ? X * X / (X * X + half * half) : 0.0 * X;
   return material.diffusivity * arrhenius *

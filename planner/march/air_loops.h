@@ -10,9 +10,9 @@ namespace lossline::march {
 
 /// Supply states, counter-flow profiles and the balances of all loops for one pass.
 struct AirRound {
-  std::vector<Air> supply;          ///< next guess, per loop
-  std::vector<Air> counter;         ///< next guess, as Iterate::counter
-  std::vector<AirReport> reports;   ///< per loop, with the states of this pass
+  std::vector<Air> supply;         ///< next guess, per loop
+  std::vector<Air> counter;        ///< next guess, as Iterate::counter
+  std::vector<AirReport> reports;  ///< per loop, with the states of this pass
 };
 
 /// The first guess: every loop at its supply temperature and fresh humidity.

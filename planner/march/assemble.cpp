@@ -106,8 +106,8 @@ void fill_balances(const Setup& setup, const LastRound& last, Solution& out) {
 
   double power_error = 0;
   for (const CavityReport& c : out.cavities)
-    power_error += std::abs(c.launched - c.bed - c.belt - c.walls - c.returned - c.ends - c.links -
-                            c.other);
+    power_error +=
+        std::abs(c.launched - c.bed - c.belt - c.walls - c.returned - c.ends - c.links - c.other);
   const PowerLedger& p = out.power;
   const double sum = p.supply_loss + p.tube_loss + p.run_loss + p.reflected + p.bed + p.belt +
                      p.walls + p.ends + p.other;

@@ -11,9 +11,9 @@ namespace lossline::march {
 
 /// The last round, complete.
 struct LastRound {
-  Iterate iterate;      ///< what the pass ran with
+  Iterate iterate;  ///< what the pass ran with
   Pass pass;
-  FieldRound field;     ///< empty when no cavity has power or the share is constant
+  FieldRound field;  ///< empty when no cavity has power or the share is constant
   AirRound air;
 };
 

@@ -20,7 +20,17 @@
 namespace lossline::march {
 
 /// Places of the unknowns.
-enum Unknown : std::size_t { E, X, alpha, air_H, air_Y, water_out, enthalpy_out, air_heat, unknowns };
+enum Unknown : std::size_t {
+  E,
+  X,
+  alpha,
+  air_H,
+  air_Y,
+  water_out,
+  enthalpy_out,
+  air_heat,
+  unknowns
+};
 using State = std::array<double, unknowns>;
 
 /// Air of temperature T [K] and humidity ratio Y.
@@ -36,13 +46,13 @@ enum class AirMode { given, with_belt, lagged };
 struct BeltSystem {
   const bed::BedMaterial* material = nullptr;
   bed::Surroundings around;
-  double speed = 1;            ///< [m/s]
-  double covered_width = 1;    ///< [m]
-  double x0 = 0, x1 = 1;       ///< [m]
-  double q0 = 0, q1 = 0;       ///< field heat at the two ends [W/m2 covered]
+  double speed = 1;          ///< [m/s]
+  double covered_width = 1;  ///< [m]
+  double x0 = 0, x1 = 1;     ///< [m]
+  double q0 = 0, q1 = 0;     ///< field heat at the two ends [W/m2 covered]
   AirMode mode = AirMode::given;
-  Air air0, air1;              ///< at the two ends; air0 alone when given
-  double air_flow = 0;         ///< dry air along the belt, for with_belt [kg/s]
+  Air air0, air1;       ///< at the two ends; air0 alone when given
+  double air_flow = 0;  ///< dry air along the belt, for with_belt [kg/s]
 
   void rate(double x, const State& y, State& f) const {
     std::array<double, unknowns> out{};
@@ -77,9 +87,8 @@ struct BeltSystem {
       air_T = air0.T + (air1.T - air0.T) * s;
       humidity = air0.Y + (air1.Y - air0.Y) * s;
     }
-    return around.through
-               ? bed::through_exchange(*material, around, moisture, T, air_T, humidity)
-               : bed::surface_exchange(*material, around, moisture, T, air_T, humidity);
+    return around.through ? bed::through_exchange(*material, around, moisture, T, air_T, humidity)
+                          : bed::surface_exchange(*material, around, moisture, T, air_T, humidity);
   }
 
   [[nodiscard]] double cure_rate(double a, double T) const {
@@ -92,17 +101,18 @@ struct BeltSystem {
     const double r = product::rate(*material->cure, a.value, T.value);
     const double da = 1e-6, dT = 1e-3;
     const double by_a = (product::rate(*material->cure, a.value + da, T.value) -
-                         product::rate(*material->cure, a.value - da, T.value)) / (2 * da);
+                         product::rate(*material->cure, a.value - da, T.value)) /
+                        (2 * da);
     const double by_T = (product::rate(*material->cure, a.value, T.value + dT) -
-                         product::rate(*material->cure, a.value, T.value - dT)) / (2 * dT);
+                         product::rate(*material->cure, a.value, T.value - dT)) /
+                        (2 * dT);
     return numerics::chain(a, by_a, T, by_T, r);
   }
 
  private:
   static double air_temperature(double H, double Y) { return water::air_temperature(H, Y); }
   template <int N>
-  static numerics::Dual<N> air_temperature(const numerics::Dual<N>& H,
-                                           const numerics::Dual<N>& Y) {
+  static numerics::Dual<N> air_temperature(const numerics::Dual<N>& H, const numerics::Dual<N>& Y) {
     const double T = water::air_temperature(H.value, Y.value);
     const auto hv = water::vapour_enthalpy(numerics::Dual<1>::variable(T, 0));
     const double by_H = 1 / (bed::dry_air_heat_capacity + Y.value * hv.slope[0]);

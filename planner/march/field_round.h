@@ -17,12 +17,12 @@ struct StationOptics {
 
 /// The solved field of one pass.
 struct FieldRound {
-  std::vector<double> heat;                      ///< next guess, as Iterate::heat
-  std::vector<field::CavityInput> inputs;        ///< per cavity
-  std::vector<field::CavityResult> results;      ///< per cavity
-  std::vector<StationOptics> stations;           ///< per cavity node, cavity by cavity
-  Flags flags;                                   ///< of the permittivity, all stations
-  double residual = 0;                           ///< of the linear system
+  std::vector<double> heat;                  ///< next guess, as Iterate::heat
+  std::vector<field::CavityInput> inputs;    ///< per cavity
+  std::vector<field::CavityResult> results;  ///< per cavity
+  std::vector<StationOptics> stations;       ///< per cavity node, cavity by cavity
+  Flags flags;                               ///< of the permittivity, all stations
+  double residual = 0;                       ///< of the linear system
 };
 
 /// Total heat nodes of all cavities.
@@ -36,7 +36,7 @@ struct FieldRound {
 
 /// Share of launched power in the bed per cavity if the mixing were `s` everywhere, at the state
 /// of the round.
-[[nodiscard]] std::vector<double> bed_share_with_mixing(const Setup& setup,
-                                                        const FieldRound& round, double s);
+[[nodiscard]] std::vector<double> bed_share_with_mixing(const Setup& setup, const FieldRound& round,
+                                                        double s);
 
 }  // namespace lossline::march

@@ -178,8 +178,7 @@ void fill_power(const Setup& setup, const LastRound& last, Solution& out) {
     if (!last.field.results.empty()) {
       report.arriving = last.field.results[end.cavity].S_upper_mean * end.channels_area;
       report.taken = report.arriving * end.passed_share;
-      report.leaving =
-          report.taken * std::pow(10.0, -end.trap->absorbing_attenuation / 10);
+      report.leaving = report.taken * std::pow(10.0, -end.trap->absorbing_attenuation / 10);
     }
     out.ends.push_back(report);
   }

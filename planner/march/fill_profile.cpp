@@ -63,7 +63,7 @@ void fill_profile(const Setup& setup, const LastRound& last, Solution& out) {
           const auto eps = last.field.stations[optics + j].eps.value;
           station.eps_real = eps.real();
           station.loss_factor = -eps.imag();
-          station.penetration_depth = product::penetration_depth(cavity->frequency, eps);
+          station.penetration_depth = product::penetration_depth(eps, cavity->frequency);
         }
       }
       out.profile.push_back(station);

@@ -19,8 +19,8 @@ struct Segment {
 
 /// The cut line.
 struct Grid {
-  std::vector<Segment> segments;                ///< in belt order; node i lies before segment i
-  std::vector<std::size_t> first, count;        ///< per stretch: first segment and how many
+  std::vector<Segment> segments;          ///< in belt order; node i lies before segment i
+  std::vector<std::size_t> first, count;  ///< per stretch: first segment and how many
   [[nodiscard]] std::size_t nodes() const { return segments.size() + 1; }
 };
 
@@ -36,8 +36,7 @@ struct GridChoice {
   double start = 0;
   for (std::size_t s = 0; s < line.stretches.size(); ++s) {
     const Stretch& stretch = line.stretches[s];
-    const std::size_t n =
-        stretch.kind == StretchKind::microwave ? choice.cavity : choice.other;
+    const std::size_t n = stretch.kind == StretchKind::microwave ? choice.cavity : choice.other;
     grid.first.push_back(grid.segments.size());
     grid.count.push_back(n);
     for (std::size_t i = 0; i < n; ++i) {

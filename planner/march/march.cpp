@@ -97,15 +97,19 @@ LastRound iterate(const Setup& setup, const SolveOptions& options, Solution& out
     }
     if (options.stop != nullptr && options.stop->load()) {
       out.status = Status::interrupted;
-      out.reason = fmt::format("interrupted after {} rounds; the numbers are not converged "
-                               "(last relative change {:.1e})", out.rounds, out.residual);
+      out.reason = fmt::format(
+          "interrupted after {} rounds; the numbers are not converged "
+          "(last relative change {:.1e})",
+          out.rounds, out.residual);
       return last;
     }
     unpack(anderson.next(from, to), scales, z);
   }
   out.rounds = options.most_rounds;
-  out.reason = fmt::format("no steady answer after {} rounds: the last relative change was {:.1e}, "
-                           "wanted {:.0e}", out.rounds, out.residual, options.tolerance);
+  out.reason = fmt::format(
+      "no steady answer after {} rounds: the last relative change was {:.1e}, "
+      "wanted {:.0e}",
+      out.rounds, out.residual, options.tolerance);
   return last;
 }
 

@@ -27,7 +27,7 @@ struct SolveOptions {
   std::size_t cavity_segments = 12;  ///< stations per cavity, less one
   std::size_t other_segments = 6;    ///< the same for other stretches
   int most_rounds = 120;
-  bool estimate_band = true;         ///< solve the ends of an estimated permittivity too
+  bool estimate_band = true;                ///< solve the ends of an estimated permittivity too
   const std::atomic<bool>* stop = nullptr;  ///< set from outside: return what there is
 };
 

@@ -69,8 +69,8 @@ Pass march_belt(const Setup& setup, const Iterate& z) {
   const double tolerance = setup.options.step_tolerance;
   constexpr double free = std::numeric_limits<double>::infinity();
   // Absolute floors: 100 J/kg is 0.05 K or so, 1e-4 kg/kg is the last digit anyone weighs.
-  const State floor{1e5 * tolerance, tolerance, tolerance, 1e4 * tolerance, 1e-2 * tolerance,
-                    free, free, free};
+  const State floor{1e5 * tolerance,  tolerance, tolerance, 1e4 * tolerance,
+                    1e-2 * tolerance, free,      free,      free};
   const numerics::StepControl control{tolerance, 100'000};
   Pass pass;
   State y{};
@@ -91,8 +91,8 @@ Pass march_belt(const Setup& setup, const Iterate& z) {
     if (system.mode == AirMode::with_belt && loop != air_loop) {
       if (air_loop != Setup::no_loop) carried[air_loop] = {y[air_H], y[air_Y]};
       const Air& supply = z.supply[loop];
-      const auto start = carried[loop].value_or(
-          std::array{water::air_enthalpy(supply.T, supply.Y), supply.Y});
+      const auto start =
+          carried[loop].value_or(std::array{water::air_enthalpy(supply.T, supply.Y), supply.Y});
       y[air_H] = start[0];
       y[air_Y] = start[1];
       air_loop = loop;
@@ -103,9 +103,9 @@ Pass march_belt(const Setup& setup, const Iterate& z) {
     const auto outcome =
         numerics::integrate(system, system.x0, system.x1, y, floor, control, h, pass.count);
     if (outcome != numerics::StepOutcome::reached) {
-      pass.failure = fmt::format("the product could not be carried through {:.3f} to {:.3f} m ({})",
-                                 system.x0, system.x1,
-                                 setup.line.stretches[setup.grid.segments[i].stretch].name);
+      pass.failure =
+          fmt::format("the product could not be carried through {:.3f} to {:.3f} m ({})", system.x0,
+                      system.x1, setup.line.stretches[setup.grid.segments[i].stretch].name);
       return pass;
     }
     const double width = setup.covered_width();

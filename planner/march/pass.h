@@ -12,9 +12,10 @@ namespace lossline::march {
 
 /// The iterated quantities of a solve.
 struct Iterate {
-  std::vector<double> heat;       ///< field heat at the nodes of all cavities, cavity by cavity [W/m2 covered]
-  std::vector<Air> supply;        ///< per air loop
-  std::vector<Air> counter;       ///< air at the nodes of counter-flow loops, loop by loop
+  std::vector<double>
+      heat;  ///< field heat at the nodes of all cavities, cavity by cavity [W/m2 covered]
+  std::vector<Air> supply;   ///< per air loop
+  std::vector<Air> counter;  ///< air at the nodes of counter-flow loops, loop by loop
 };
 
 /// What one segment exchanged, whole covered width.
@@ -26,10 +27,10 @@ struct SegmentFlows {
 
 /// What a pass found.
 struct Pass {
-  std::vector<State> nodes;          ///< product and co-flow air at every node
-  std::vector<SegmentFlows> flows;   ///< per segment
+  std::vector<State> nodes;         ///< product and co-flow air at every node
+  std::vector<SegmentFlows> flows;  ///< per segment
   numerics::StepCount count;
-  std::string failure;               ///< empty, or why the stepper gave up and where
+  std::string failure;  ///< empty, or why the stepper gave up and where
 };
 
 /// The system of one segment under the given iterate.

@@ -12,7 +12,9 @@
 namespace lossline::march {
 namespace {
 
-double share_passed(double attenuation_dB) { return std::pow(10.0, -attenuation_dB / 10); }
+double share_passed(double attenuation_dB) {
+  return std::pow(10.0, -attenuation_dB / 10);
+}
 
 /// The passage between a stretch and its neighbours: its own, else the trap's, else full.
 Opening passage(const Line& line, const Stretch& stretch) {
@@ -26,11 +28,10 @@ void add_branches(Setup& setup) {
   for (std::size_t g = 0; g < setup.line.generators.size(); ++g) {
     const Generator& generator = setup.line.generators[g];
     const Run& run = generator.run;
-    const double loss_dB =
-        run.width > 0 ? run.excess_factor * run.length *
-                            field::te10_wall_loss(generator.frequency, run.width, run.height,
-                                                  run.resistivity)
-                      : 0.0;
+    const double loss_dB = run.width > 0 ? run.excess_factor * run.length *
+                                               field::te10_wall_loss(generator.frequency, run.width,
+                                                                     run.height, run.resistivity)
+                                         : 0.0;
     for (const FeedBranch& feed : generator.feeds) {
       for (std::size_t c = 0; c < setup.cavities.size(); ++c) {
         Cavity& cavity = setup.cavities[c];
@@ -122,9 +123,9 @@ void add_surroundings(Setup& setup) {
       const AirLoop& air = setup.line.air[found];
       around.through = true;
       around.through_flow = air.dry_air_flow / loop_area(setup, found);
-      around.piece_heat = air.piece_heat_transfer.value_or(bed::granule_heat_transfer(
-          around.through_flow, 2 * setup.material.piece_radius,
-          air.supply_temperature.value_or(air.fresh_temperature)));
+      around.piece_heat = air.piece_heat_transfer.value_or(
+          bed::granule_heat_transfer(around.through_flow, 2 * setup.material.piece_radius,
+                                     air.supply_temperature.value_or(air.fresh_temperature)));
       if (!air.piece_heat_transfer)
         setup.assumptions.push_back(
             {"piece_heat_transfer",
@@ -154,7 +155,8 @@ double Setup::depth(double X) const {
 
 Setup prepare(const Line& line, const ProductCard& card, const SolveOptions& options,
               std::string& refusal) {
-  Setup setup{line, card, options, {}, topology(line), {}, {}, {}, field::AngleClasses(), {}, {}, {}, {}, {}, {}};
+  Setup setup{line, card, options, {}, topology(line), {}, {}, {}, field::AngleClasses(), {}, {},
+              {},   {},   {},      {}};
   std::vector<FlowProblem> problems;
   setup.flow = resolve_flow(line, card, problems);
   if (!problems.empty())

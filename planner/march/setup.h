@@ -18,27 +18,27 @@ namespace lossline::march {
 /// One powered or idle cavity.
 struct Cavity {
   std::size_t stretch = 0;
-  double frequency = 0;       ///< [Hz]; 0 when no generator feeds it
-  double launched = 0;        ///< [W]
-  double open_upper = 0;      ///< cross section of its open ends [m2]
+  double frequency = 0;   ///< [Hz]; 0 when no generator feeds it
+  double launched = 0;    ///< [W]
+  double open_upper = 0;  ///< cross section of its open ends [m2]
 };
 
 /// A generator's branch with the losses on its way.
 struct Branch {
   std::size_t generator = 0;
-  std::size_t cavity = 0;     ///< index into Setup::cavities
-  double output = 0;          ///< leaves the flange [W]
-  double run_share = 0;       ///< lost on one way through the run, 0..1
-  double launched = 0;        ///< enters the cavity [W]
-  double direct = 0;          ///< sent back at the launcher [W]
+  std::size_t cavity = 0;  ///< index into Setup::cavities
+  double output = 0;       ///< leaves the flange [W]
+  double run_share = 0;    ///< lost on one way through the run, 0..1
+  double launched = 0;     ///< enters the cavity [W]
+  double direct = 0;       ///< sent back at the launcher [W]
 };
 
 /// One end of the tunnel.
 struct TunnelEnd {
   std::size_t cavity = 0;
   const EndTrap* trap = nullptr;
-  double channels_area = 0;   ///< cross section of all channels before the reflective part [m2]
-  double passed_share = 0;    ///< not sent back by the reflective part, 0..1
+  double channels_area = 0;  ///< cross section of all channels before the reflective part [m2]
+  double passed_share = 0;   ///< not sent back by the reflective part, 0..1
 };
 
 /// The fixed part of a solve. Keeps references to line and card.
@@ -56,8 +56,8 @@ struct Setup {
   std::vector<field::CavityLink> links;
   std::vector<Branch> branches;
   std::vector<TunnelEnd> ends;
-  std::vector<bed::Surroundings> around;   ///< per stretch
-  std::vector<std::size_t> loop_of;        ///< per stretch: air loop, or no_loop
+  std::vector<bed::Surroundings> around;  ///< per stretch
+  std::vector<std::size_t> loop_of;       ///< per stretch: air loop, or no_loop
   double solid_share = 1;  ///< pieces over bed volume, turns a piece's permittivity into the bed's
 
   static constexpr std::size_t no_loop = static_cast<std::size_t>(-1);
@@ -75,7 +75,7 @@ struct Setup {
 ///
 ///   refusal  receives one sentence when the line cannot be solved at all; then the returned
 ///            setup must not be used
-[[nodiscard]] Setup prepare(const Line& line, const ProductCard& card,
-                            const SolveOptions& options, std::string& refusal);
+[[nodiscard]] Setup prepare(const Line& line, const ProductCard& card, const SolveOptions& options,
+                            std::string& refusal);
 
 }  // namespace lossline::march

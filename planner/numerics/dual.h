@@ -122,7 +122,9 @@ Dual<N> sqrt(const Dual<N>& a) {
 }
 
 /// The plain value of a number or a dual, for comparisons and branches.
-inline double plain(double a) { return a; }
+inline double plain(double a) {
+  return a;
+}
 template <int N>
 double plain(const Dual<N>& a) {
   return a.value;

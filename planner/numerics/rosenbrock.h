@@ -171,8 +171,8 @@ StepOutcome integrate(System& system, double x, double x_end, std::array<double,
     if (good) {
       for (std::size_t k = 0; k < N; ++k) {
         if (std::isinf(floor[k])) continue;
-        const double scale = floor[k] + control.relative_tolerance *
-                                            std::max(std::abs(y[k]), std::abs(end[k]));
+        const double scale =
+            floor[k] + control.relative_tolerance * std::max(std::abs(y[k]), std::abs(end[k]));
         const double e = u[rodas::stages - 1][k] / scale;
         error += e * e;
         ++controlled;

@@ -66,16 +66,16 @@ struct ProductCard {
   std::optional<Property> dry_bulk_density;         ///< dry solid per bed volume [kg/m3]
   std::optional<Property> dry_piece_density;        ///< dry solid per piece volume [kg/m3]
   std::optional<Property> solid_density;            ///< of the pore-free solid [kg/m3]
-  std::optional<Property> shrinkage;  ///< beta in rho_dry = rho_dry,0 / (1 + beta X), 1
-  std::optional<Property> conductivity;             ///< dry [W/(m K)]
-  std::optional<Property> conductivity_slope;       ///< per dry-basis moisture [W/(m K)]
-  std::optional<Property> diffusivity;              ///< liquid, at 298.15 K, wet end [m2/s]
-  std::optional<Property> diffusivity_activation;   ///< [J/mol]
+  std::optional<Property> shrinkage;           ///< beta in rho_dry = rho_dry,0 / (1 + beta X), 1
+  std::optional<Property> conductivity;        ///< dry [W/(m K)]
+  std::optional<Property> conductivity_slope;  ///< per dry-basis moisture [W/(m K)]
+  std::optional<Property> diffusivity;         ///< liquid, at 298.15 K, wet end [m2/s]
+  std::optional<Property> diffusivity_activation;     ///< [J/mol]
   std::optional<Property> diffusivity_half_moisture;  ///< X where D has half its wet value, 1
-  std::optional<Property> permeability;             ///< gas, intrinsic [m2]
-  std::optional<Property> vapour_factor;            ///< pore diffusion over free-air diffusion, 1
-  std::optional<Property> saturation_moisture;      ///< X with all pores full, dry basis
-  std::optional<Property> heat_of_reaction;         ///< per dry solid, positive = released [J/kg]
+  std::optional<Property> permeability;               ///< gas, intrinsic [m2]
+  std::optional<Property> vapour_factor;              ///< pore diffusion over free-air diffusion, 1
+  std::optional<Property> saturation_moisture;        ///< X with all pores full, dry basis
+  std::optional<Property> heat_of_reaction;           ///< per dry solid, positive = released [J/kg]
   std::optional<product::CureModel> cure;
   Provenance cure_provenance;
 

@@ -31,8 +31,8 @@ struct Templated {
 
 /// Error at x = 1 after `steps` equal steps: the tolerance is so loose that no step is changed.
 template <std::size_t N, class Formula>
-double fixed_step_error(Formula formula, std::array<double, N> y, const std::array<double, N>& exact,
-                        int steps) {
+double fixed_step_error(Formula formula, std::array<double, N> y,
+                        const std::array<double, N>& exact, int steps) {
   Templated<N, Formula> system{formula};
   std::array<double, N> floor;
   floor.fill(1e9);
@@ -69,7 +69,9 @@ const auto logistic = [](const auto&, const auto& y) {
   return std::array<S, 1>{3.0 * y[0] * (1.0 - y[0])};
 };
 
-double measured_order(double coarse, double fine) { return std::log2(coarse / fine); }
+double measured_order(double coarse, double fine) {
+  return std::log2(coarse / fine);
+}
 
 }  // namespace
 
