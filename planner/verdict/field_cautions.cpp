@@ -1,0 +1,140 @@
+// Cautions about the field: what leaves, what comes back, what stands in it.
+
+#include <fmt/format.h>
+
+#include <algorithm>
+
+#include "planner/base/constants.h"
+#include "planner/verdict/caution_rules.h"
+
+namespace lossline::verdict {
+namespace {
+
+double half_wavelength(double frequency) {
+  return speed_of_light / frequency / 2;
+}
+
+double highest_frequency(const Line& line) {
+  double f = 0;
+  for (const Generator& g : line.generators) f = std::max(f, g.frequency);
+  return f;
+}
+
+std::string leaving_text(const Solution& s) {
+  double leaving = 0, arriving = 0;
+  for (const EndReport& end : s.ends) {
+    leaving += end.leaving;
+    arriving += end.arriving;
+  }
+  if (!(arriving > 0)) return "";
+  return fmt::format(" The plan lets {:.3g} W pass the traps, as their attenuation is stated.",
+                     leaving);
+}
+
+void add_leakage(const CautionCase& c, std::vector<Caution>& out) {
+  out.push_back({"C01", "Leakage",
+                 "nothing here is a leakage measurement: survey on site with a calibrated meter at "
+                 "the stated distance, with product and empty, at every opening height." +
+                     leaving_text(c.solution),
+                 "", deciding("IEC 60519-6"), true});
+}
+
+/// The product as a wave path, and openings too wide for their height to help.
+void add_openings(const CautionCase& c, std::vector<Caution>& out) {
+  const double frequency = highest_frequency(c.line);
+  const bool continuous = c.line.product.kind != ProductKind::pieces;
+  const double depth = c.solution.answer.flow.depth;
+  for (const auto* trap : {&c.line.inlet_trap, &c.line.outlet_trap}) {
+    if (!*trap) continue;
+    const EndTrap& t = **trap;
+    const double filled = t.opening.height > 0 ? depth / t.opening.height : 0.0;
+    if (continuous || filled > filled_opening_share)
+      out.push_back({"C02", "Product as wave path",
+                     fmt::format("the product fills {:.0f} % of the opening's height{}: it can "
+                                 "carry power out as a guide; probe along the load itself and keep "
+                                 "the reach distance",
+                                 100 * filled, continuous ? " and runs through without a gap" : ""),
+                     t.name, deciding("IEC 60519-6"), false});
+    const double widest = std::max(t.opening.width, t.opening.height);
+    if (frequency > 0 && widest > half_wavelength(frequency))
+      out.push_back(
+          {"C02b", "Wide opening",
+           fmt::format(
+               "{:.0f} mm is wider than half a wavelength ({:.0f} mm at 2450 MHz, {:.0f} mm "
+               "at 915 MHz), so a low height holds nothing back: the reflective and "
+               "absorbing sections must, guaranteed with product in place by {}",
+               1000 * widest, 1000 * half_wavelength(2450e6), 1000 * half_wavelength(915e6),
+               t.guaranteed_by.empty() ? "nobody yet" : t.guaranteed_by),
+           t.name, deciding("IEC 60519-6"), false});
+  }
+}
+
+/// Seconds from the present state to the lowest temperature limit with belt and evaporation
+/// stopped and power on; the shortest along the belt.
+std::string halt_text(const CautionCase& c) {
+  double limit = c.line.limits.product_temperature.value_or(1e9);
+  for (const ProductLimit& l : c.card.limits)
+    if (l.kind == LimitKind::product_temperature || l.kind == LimitKind::runaway_temperature)
+      limit = std::min(limit, l.value);
+  const ProductFlow& flow = c.solution.answer.flow;
+  if (!(limit < 1e9) || !c.card.dry_heat_capacity || !(flow.speed > 0))
+    return "how long the product bears the power is unknown";
+  double shortest = -1;
+  for (const Station& s : c.solution.profile) {
+    const double capacity =
+        flow.dry_solids / flow.speed * (c.card.dry_heat_capacity->value + 4186.0 * s.moisture);
+    if (!(s.product_power > 0) || !(capacity > 0)) continue;
+    const double seconds = std::max(limit - s.temperature, 0.0) * capacity / s.product_power;
+    if (shortest < 0 || seconds < shortest) shortest = seconds;
+  }
+  if (shortest < 0) return "how long the product bears the power is unknown";
+  return fmt::format(
+      "with power on and no evaporation the product's mean reaches {:.0f} degC in "
+      "about {:.0f} s, hot spots sooner",
+      limit - celsius_zero, shortest);
+}
+
+void add_power_cautions(const CautionCase& c, std::vector<Caution>& out) {
+  out.push_back({"C06", "Belt stop",
+                 halt_text(c) + ": power off on loss of belt motion must be hard-wired, apart from "
+                                "the control software; keep extraction running",
+                 "", deciding("ISO 12100, ISO 13849-1"), false});
+  std::string thin, reflected;
+  for (const CavityReport& cavity : c.solution.cavities)
+    if (cavity.launched > 0 && cavity.bed < thin_load_share * cavity.launched)
+      thin += (thin.empty() ? "" : ", ") + cavity.name;
+  for (const Margin& m : c.margins.all)
+    if (m.name == "reflected over output" && m.standing != Standing::within)
+      reflected += (reflected.empty() ? "" : ", ") + m.where;
+  if (!thin.empty() || !reflected.empty()) {
+    std::string why;
+    if (!thin.empty()) why = "less than half of the launched power is in the product in " + thin;
+    if (!reflected.empty())
+      why += (why.empty() ? "" : "; ") +
+             ("reflected power is near its limit or has none stated at " + reflected);
+    out.push_back({"C07", "Thin or missing load",
+                   why + ": interlock power to product presence and reflected power; isolator and "
+                         "water load sized for full reflection",
+                   thin.empty() ? reflected : thin, deciding("the generator supplier's data sheet"),
+                   false});
+  }
+  for (std::size_t i = 0; i < c.solution.topology.cavities.size(); ++i) {
+    if (c.solution.topology.feeders[i].size() < 2) continue;
+    const std::string& name = c.line.stretches[c.solution.topology.cavities[i]].name;
+    out.push_back({"C24", "Crosstalk",
+                   fmt::format("{} generators share this cavity: each one's reflected reading "
+                               "includes its neighbours' power",
+                               c.solution.topology.feeders[i].size()),
+                   name, deciding("the generator supplier's data sheet"), false});
+  }
+}
+
+}  // namespace
+
+void add_field_cautions(const CautionCase& c, std::vector<Caution>& out) {
+  add_leakage(c, out);
+  add_openings(c, out);
+  add_power_cautions(c, out);
+}
+
+}  // namespace lossline::verdict
