@@ -24,7 +24,7 @@ struct SolveOptions {
   Level level = Level::mean;
   double tolerance = 1e-8;           ///< on the iterated quantities, relative
   double step_tolerance = 1e-6;      ///< of the product's stepper, relative
-  std::size_t cavity_segments = 12;  ///< stations per cavity, less one
+  std::size_t cavity_segments = 8;   ///< stations per cavity, less one
   std::size_t other_segments = 6;    ///< the same for other stretches
   int most_rounds = 120;
   bool estimate_band = true;                ///< solve the ends of an estimated permittivity too

@@ -78,10 +78,13 @@ TEST(Solve, GivesTheSameProductAtHalfSpeedAndHalfPower) {
 
 TEST(Solve, SettlesAtSecondOrderOrBetterInTheStations) {
   Line line = sample::small_line(2);
-  line.belt.speed = 0.0035;  // the loss factor falls steeply along each cavity
+  // Below boiling all along, so that nothing has a kink: heat and loss factor vary smoothly.
+  line.belt.speed = 0.002;
+  for (Generator& g : line.generators) g.set_point = 3e3;
+  for (Stretch& s : line.stretches) s.heat_transfer_top = 60;
   const ProductCard card = sample::open_card(0.3);
   double X[3];
-  std::size_t n = 6;
+  std::size_t n = 12;
   for (double& x : X) {
     SolveOptions options;
     options.cavity_segments = n;
@@ -94,7 +97,7 @@ TEST(Solve, SettlesAtSecondOrderOrBetterInTheStations) {
   }
   const double order = std::log2(std::abs(X[0] - X[1]) / std::abs(X[1] - X[2]));
   EXPECT_GT(order, 1.8) << X[0] << ' ' << X[1] << ' ' << X[2];
-  EXPECT_NEAR(X[1], X[2], 1e-3 * X[2]);  // the default grid's own error
+  EXPECT_NEAR(X[0], X[2], 1e-4 * X[2]);
 }
 
 TEST(Solve, NeverHandsTheProductMoreThanTheGeneratorsGive) {
