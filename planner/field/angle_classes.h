@@ -27,14 +27,17 @@ class AngleClasses {
   /// Weight of class i in the integral of mu from 0 to 1; the weights sum to 1.
   [[nodiscard]] double weight(std::size_t i) const { return weight_[i]; }
 
-  /// |cosine| to the normal of a vertical face, sqrt(1 - mu^2) |cos phi|, at equally likely
-  /// azimuths phi of class i.
+  /// |cosine| to the normal of a vertical face, sqrt(1 - mu^2) |cos phi|, at `azimuths` nodes of
+  /// class i.
   [[nodiscard]] std::span<const double> lateral_cosines(std::size_t i) const {
     return {lateral_.data() + i * azimuths, azimuths};
   }
+  /// Weights of those nodes in the mean over the azimuth phi; they sum to 1. Nodes crowd where the
+  /// wave grazes the face; six give a smooth absorptance to 1e-4.
+  [[nodiscard]] std::span<const double> lateral_weights() const { return lateral_weight_; }
 
  private:
-  std::vector<double> mu_, weight_, lateral_;
+  std::vector<double> mu_, weight_, lateral_, lateral_weight_;
 };
 
 }  // namespace lossline::field

@@ -24,10 +24,14 @@ class BandMatrix {
   }
   /// y = A x of the matrix not yet factored.
   void multiply(std::span<const double> x, std::span<double> y) const;
+  /// Writes the matrix not yet factored into a full one, row by row.
+  void spread(std::span<double> full) const;
   /// Replaces the matrix by its factors; false when it is not positive definite or not finite.
   [[nodiscard]] bool factor();
   /// Solves in place with the factors.
-  void solve(std::span<double> x) const;
+  ///
+  ///   x        one right-hand side after another, interleaved: [unknown * columns + column]
+  void solve(std::span<double> x, std::size_t columns = 1) const;
 
  private:
   [[nodiscard]] std::size_t first(std::size_t row) const { return row > band_ ? row - band_ : 0; }

@@ -53,9 +53,10 @@ void add_bare_belt(double k0, double mu, const LayerWave& belt, double coverage,
 
 /// Mean of x a(x) over the azimuths of a class, both polarisations averaged.
 double side_mean(double k0, Complex eps, double width, std::span<const double> cosines,
-                 bool opaque) {
+                 std::span<const double> weights, bool opaque) {
   double sum = 0;
-  for (const double x : cosines) {
+  for (std::size_t k = 0; k < cosines.size(); ++k) {
+    const double x = cosines[k];
     const Complex kz = kernel::decaying_root({(eps.real() - 1) + x * x, eps.imag()});
     const Complex tm = x * eps;
     // Power that enters a half-space, without the cancellation of 1 - R.
@@ -63,14 +64,15 @@ double side_mean(double k0, Complex eps, double width, std::span<const double> c
     const double in_tm =
         4 * (tm.real() * kz.real() + tm.imag() * kz.imag()) / kernel::squared(tm + kz);
     if (opaque) {
-      sum += x * (in_te + in_tm);
+      sum += weights[k] * x * (in_te + in_tm);
     } else {
       const double lost = -std::expm1(2 * k0 * kz.imag() * width), left = 1 - lost;
       // The written form stays finite without loss, where both parts vanish.
-      sum += x * (in_te * lost / (lost + in_te * left) + in_tm * lost / (lost + in_tm * left));
+      sum += weights[k] * x *
+             (in_te * lost / (lost + in_te * left) + in_tm * lost / (lost + in_tm * left));
     }
   }
-  return 0.5 * sum / static_cast<double>(cosines.size());
+  return 0.5 * sum;
 }
 
 }  // namespace
@@ -111,8 +113,9 @@ BedOptics bed_optics(const AngleClasses& classes, const BedSection& section) {
     out.belt_bottom[i] = 0.5 * sum.belt_bottom;
     out.transmitted[i] = 0.5 * sum.transmitted;
     if (section.depth > 0 && section.eps.imag() < 0)
-      out.side[i] = section.coverage *
-                    side_mean(k0, section.eps, section.width, classes.lateral_cosines(i), opaque);
+      out.side[i] =
+          section.coverage * side_mean(k0, section.eps, section.width, classes.lateral_cosines(i),
+                                       classes.lateral_weights(), opaque);
   }
   return out;
 }

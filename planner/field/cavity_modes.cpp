@@ -5,6 +5,7 @@
 
 #include "planner/base/constants.h"
 #include "planner/field/range.h"
+#include "planner/field/waveguide.h"
 
 namespace lossline::field {
 namespace {
@@ -125,6 +126,11 @@ double mean_square_field(double frequency, double volume, double Q, double power
   in_range("power", power, "W", 0, 1e12);
   return Q * power /
          (2 * pi * frequency_in_range(frequency) * electric_constant * checked_volume(volume));
+}
+
+double te10l_length(double frequency, double width, int half_waves, double filling) {
+  in_range("half waves", half_waves, "(1)", 1, 1e6);
+  return half_waves * guide_wavelength(frequency, width, filling) / 2;
 }
 
 double te10l_frequency(const ResonantGuide& guide) {

@@ -91,6 +91,15 @@ struct ResonantGuide {
   std::complex<double> filling{1, 0};        ///< eps' - j eps''
 };
 
+/// Length that puts the TE10l resonance at a frequency [m].
+///
+///   frequency   [Hz], above the cut-off of the guide
+///   width       broad side [m]
+///   half_waves  l, 1 or more
+///   filling     eps', >= 1
+///   throws      Error out_of_range
+double te10l_length(double frequency, double width, int half_waves, double filling = 1);
+
 /// Resonance [Hz].
 double te10l_frequency(const ResonantGuide& guide);
 /// Quality factor of the walls ([Pozar] eq. 6.46).

@@ -125,15 +125,14 @@ class Network {
   void solve() {
     const bool mixed = std::any_of(mixing_.begin(), mixing_.end(), [](double m) { return m > 0; });
     if (n_ == 0) return;
-    if (mixed)
-      solve_mixed();
-    else
-      for (std::size_t i = 0; i < classes_.size(); ++i) {
-        BandMatrix matrix = losses(i);
-        factor(matrix);
-        source(i, field(i));
-        matrix.solve(field(i));
-      }
+    if (mixed) return solve_mixed();
+    BandMatrix matrix(n_, band_);
+    for (std::size_t i = 0; i < classes_.size(); ++i) {
+      fill_losses(i, matrix);
+      factor(matrix);
+      source(i, field(i));
+      matrix.solve(field(i));
+    }
   }
 
   [[nodiscard]] CavityResult result(std::size_t c) const;
@@ -145,8 +144,8 @@ class Network {
   }
 
   /// Sinks and links of class i, without the mixing.
-  [[nodiscard]] BandMatrix losses(std::size_t i) const {
-    BandMatrix matrix(n_, band_);
+  void fill_losses(std::size_t i, BandMatrix& matrix) const {
+    matrix.clear();
     const double mu = classes_.mu(i);
     for (std::size_t c = 0; c < cavities_.size(); ++c) {
       const double link = part(cavities_[c].transmitted, i);
@@ -160,7 +159,6 @@ class Network {
       matrix.add(high, high, link.sigma_m2);
       matrix.add(high, low, -link.sigma_m2);
     }
-    return matrix;
   }
   void source(std::size_t i, std::span<double> out) const {
     for (std::size_t c = 0; c < cavities_.size(); ++c) {
@@ -188,39 +186,29 @@ class Network {
 /// is the same as (A + D)(S - m) = P - A m. The mean of S - m vanishes, which gives m; and in this
 /// form the balance closes to rounding however strong the mixing is.
 void Network::solve_mixed() {
-  std::vector<BandMatrix> plain, factors;
-  plain.reserve(classes_.size());
-  factors.reserve(classes_.size());
-  std::vector<double> mean(n_, 0.0), coupling(n_ * n_, 0.0), unit(n_), column(n_);
+  const BandMatrix empty(n_, band_);
+  std::vector<BandMatrix> plain(classes_.size(), empty), factors(classes_.size(), empty);
+  std::vector<double> mean(n_, 0.0), work(n_), coupling(n_ * n_, 0.0), block(n_ * n_);
   for (std::size_t i = 0; i < classes_.size(); ++i) {
     const double weight = classes_.weight(i);
-    plain.push_back(losses(i));
-    factors.push_back(plain.back());
-    BandMatrix& matrix = factors.back();
-    for (std::size_t k = 0; k < n_; ++k) matrix.add(k, k, mixing_[k]);
-    factor(matrix);
-    source(i, column);
-    matrix.solve(column);
-    for (std::size_t k = 0; k < n_; ++k) mean[k] += weight * column[k];
-    for (std::size_t k = 0; k < n_; ++k) {
-      if (!(mixing_[k] > 0)) {  // (A + D)^-1 A = 1 - (A + D)^-1 D
-        coupling[k * n_ + k] += weight;
-        continue;
-      }
-      std::fill(unit.begin(), unit.end(), 0.0);
-      unit[k] = 1;
-      plain.back().multiply(unit, column);
-      matrix.solve(column);
-      for (std::size_t j = 0; j < n_; ++j) coupling[j * n_ + k] += weight * column[j];
-    }
+    fill_losses(i, plain[i]);
+    factors[i] = plain[i];
+    for (std::size_t k = 0; k < n_; ++k) factors[i].add(k, k, mixing_[k]);
+    factor(factors[i]);
+    source(i, work);
+    factors[i].solve(work);
+    for (std::size_t k = 0; k < n_; ++k) mean[k] += weight * work[k];
+    plain[i].spread(block);
+    factors[i].solve(block, n_);
+    for (std::size_t k = 0; k < n_ * n_; ++k) coupling[k] += weight * block[k];
   }
   if (!solve_full(coupling, mean))
     throw Error(ErrorKind::internal, "the mixing of the cavities is singular");
   for (std::size_t i = 0; i < classes_.size(); ++i) {
     const std::span<double> S = field(i);
     source(i, S);
-    plain[i].multiply(mean, column);
-    for (std::size_t k = 0; k < n_; ++k) S[k] -= column[k];
+    plain[i].multiply(mean, work);
+    for (std::size_t k = 0; k < n_; ++k) S[k] -= work[k];
     factors[i].solve(S);
     for (std::size_t k = 0; k < n_; ++k) S[k] += mean[k];
   }
@@ -229,6 +217,8 @@ void Network::solve_mixed() {
 CavityResult Network::result(std::size_t c) const {
   const CavityInput& cavity = cavities_[c];
   CavityResult out;
+  out.S_upper.reserve(classes_.size());
+  out.S_lower.reserve(classes_.size());
   for (std::size_t i = 0; i < classes_.size(); ++i) {
     const double weight = classes_.weight(i), mu = classes_.mu(i);
     const double upper = field(i, 2 * c), lower = field(i, 2 * c + 1);
