@@ -69,7 +69,7 @@ Factor stated_density(const Line& line, const ProductCard& card) {
     factor.value = card.dry_bulk_density->value / swelling;
   else if (!bed && card.dry_piece_density)
     factor.value = card.dry_piece_density->value / swelling;
-  else if (line.product.kind == ProductKind::slab && card.dry_bulk_density)
+  else if (!bed && card.dry_bulk_density)
     factor.value = card.dry_bulk_density->value / swelling;
   return factor;
 }

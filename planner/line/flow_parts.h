@@ -26,7 +26,8 @@ struct Factor {
 [[nodiscard]] Factor stated_rate(const Line& line, std::vector<FlowProblem>& problems);
 
 /// Dry solid per volume at feed moisture [kg/m3]: of the bed from feed.bulk_density or the card's
-/// bulk density, of a slab, profile or piece from feed.bulk_density or the card's piece density.
+/// bulk density, of a slab, profile or piece from feed.bulk_density, the card's piece
+/// density or, where it has none, its bulk density.
 [[nodiscard]] Factor stated_density(const Line& line, const ProductCard& card);
 
 /// Makes product = factor 1 x factor 2 x ... hold: fills the one value that is missing, or checks

@@ -25,8 +25,8 @@ void check_names(const List& list, const char* table, Topology& out) {
   }
 }
 
-std::string feed_key(std::size_t generator, std::size_t feed, const char* member) {
-  return key("generator", generator, "feed") + '[' + std::to_string(feed + 1) + "]." + member;
+std::string feed_key(std::size_t generator, std::size_t feed) {
+  return key("generator", generator, "feeds") + '[' + std::to_string(feed + 1) + ']';
 }
 
 void check_generator(const Line& line, std::size_t g, Topology& out) {
@@ -37,22 +37,20 @@ void check_generator(const Line& line, std::size_t g, Topology& out) {
     shares += generator.feeds[f].share;
     const std::size_t stretch = find_stretch(line, name);
     if (stretch == npos)
-      out.problems.push_back({feed_key(g, f, "stretch"),
-                              "'" + name + "' is not the name of a stretch",
+      out.problems.push_back({feed_key(g, f), "'" + name + "' is not the name of a stretch",
                               "name one of the [[stretch]] tables"});
     else if (line.stretches[stretch].kind != StretchKind::microwave)
       out.problems.push_back(
-          {feed_key(g, f, "stretch"),
-           "'" + name + "' is not a microwave stretch, and power cannot enter it",
+          {feed_key(g, f), "'" + name + "' is not a microwave stretch, and power cannot enter it",
            "feed a stretch of kind \"microwave\""});
   }
   if (generator.feeds.empty())
-    out.problems.push_back({key("generator", g, "feed"),
+    out.problems.push_back({key("generator", g, "feeds"),
                             "'" + generator.name + "' feeds no stretch",
                             "name the stretch its power enters"});
   else if (!(std::abs(shares - 1) <= 1e-6))
     out.problems.push_back(
-        {key("generator", g, "feed"),
+        {key("generator", g, "shares"),
          fmt::format("the shares of '{}' add up to {:.6g}", generator.name, shares),
          "they must add up to 1"});
 }

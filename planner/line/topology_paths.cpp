@@ -75,8 +75,8 @@ void read_paths(const Line& line, const Parts& parts, Topology& out) {
   }
   if (powered.empty()) return;
   const std::vector<Vertex> previous = open_predecessors(parts, powered);
-  check_end(parts, previous, parts.room_inlet, "inlet_trap", out);
-  check_end(parts, previous, parts.room_outlet, "outlet_trap", out);
+  check_end(parts, previous, parts.room_inlet, "endtrap.inlet", out);
+  check_end(parts, previous, parts.room_outlet, "endtrap.outlet", out);
 }
 
 }  // namespace lossline::part_graph

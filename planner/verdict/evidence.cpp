@@ -67,6 +67,13 @@ std::vector<std::string> stamps(const Line& line, const Solution& solution) {
         fmt::format("CONSTANT SHARE: {:.0f} % of launched power put into the product by "
                     "decree, no cavity balance",
                     100 * line.solve.load_share));
+  std::string unusable;
+  for (const CavityReport& cavity : solution.cavities)
+    for (const field::ValidityFlag& flag : cavity.validity)
+      if (flag.grade == field::ValidityGrade::unusable &&
+          unusable.find(cavity.name) == std::string::npos)
+        unusable += (unusable.empty() ? "" : ", ") + cavity.name;
+  if (!unusable.empty()) out.push_back("FIELD MODEL DOES NOT HOLD in " + unusable);
   if (line.product.contains_metal)
     out.emplace_back("NOT FOR ORDER: metal in the product without a handling plan");
   if (solution.flags.has(flag::invented))

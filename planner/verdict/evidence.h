@@ -24,8 +24,8 @@ struct EvidenceSummary {
 
 [[nodiscard]] EvidenceSummary evidence_summary(const Solution& solution);
 
-/// Words that must stand on every output, most important first: not solved, constant share, metal,
-/// invented data, unverified data.
+/// Words that must stand on every output, most important first: not solved, constant share, field
+/// model not valid, metal, invented data, unverified data.
 [[nodiscard]] std::vector<std::string> stamps(const Line& line, const Solution& solution);
 
 /// The marks as words, "extrapolated", "estimated", ...

@@ -5,7 +5,9 @@
 #include <algorithm>
 
 #include "planner/base/constants.h"
+#include "planner/field/openings.h"
 #include "planner/verdict/caution_rules.h"
+#include "planner/verdict/outside_field.h"
 
 namespace lossline::verdict {
 namespace {
@@ -20,23 +22,30 @@ double highest_frequency(const Line& line) {
   return f;
 }
 
-std::string leaving_text(const Solution& s) {
-  double leaving = 0, arriving = 0;
-  for (const EndReport& end : s.ends) {
-    leaving += end.leaving;
-    arriving += end.arriving;
-  }
-  if (!(arriving > 0)) return "";
-  return fmt::format(" The plan lets {:.3g} W pass the traps, as their attenuation is stated.",
-                     leaving);
+const EndTrap* trap_named(const Line& line, const std::string& name) {
+  for (const auto* trap : {&line.inlet_trap, &line.outlet_trap})
+    if (*trap && (*trap)->name == name) return &**trap;
+  return nullptr;
 }
 
 void add_leakage(const CautionCase& c, std::vector<Caution>& out) {
+  std::string where, estimate;
+  for (const EndReport& end : c.solution.ends) {
+    const EndTrap* trap = trap_named(c.line, end.name);
+    if (trap == nullptr) continue;
+    const std::optional<OutsideField> outside = outside_field(*trap, end);
+    if (!outside) continue;
+    estimate += fmt::format(
+        "; estimate at {}: {} the strictest level of {:.3g} W/m2 (band {:.1e} "
+        "to {:.1e} W/m2 at 5 cm, levels unverified)",
+        end.name, outside->word, outside->level, outside->low, outside->high);
+    if (outside->word != "below") where += (where.empty() ? "" : ", ") + end.name;
+  }
   out.push_back({"C01", "Leakage",
-                 "nothing here is a leakage measurement: survey on site with a calibrated meter at "
-                 "the stated distance, with product and empty, at every opening height." +
-                     leaving_text(c.solution),
-                 "", deciding("IEC 60519-6"), true});
+                 "nothing here is a measurement: survey on site with a calibrated meter at the "
+                 "stated distance, with product and empty, at every opening height" +
+                     estimate,
+                 where, deciding("IEC 60519-6 and the exposure rules"), where.empty()});
 }
 
 /// The product as a wave path, and openings too wide for their height to help.
@@ -56,7 +65,7 @@ void add_openings(const CautionCase& c, std::vector<Caution>& out) {
                                  100 * filled, continuous ? " and runs through without a gap" : ""),
                      t.name, deciding("IEC 60519-6"), false});
     const double widest = std::max(t.opening.width, t.opening.height);
-    if (frequency > 0 && widest > half_wavelength(frequency))
+    if (frequency > 0 && widest > 0 && field::wide_slot(frequency, widest, widest))
       out.push_back(
           {"C02b", "Wide opening",
            fmt::format(

@@ -94,7 +94,7 @@ void add_energy_floor(const Case& c, std::vector<Margin>& out) {
   if (!(answer.evaporated > 0) || !(answer.energy_floor > 0)) return;
   const PowerLedger& power = c.solution.power;
   Margin m;
-  m.name = "energy over heat of evaporation";
+  m.name = "energy per water";
   m.origin = "physics";
   m.reason = "no water leaves for less; below it the inputs or the balance are wrong";
   m.measure = Measure::specific_energy;

@@ -5,8 +5,8 @@
 
 #include <algorithm>
 
-#include "planner/base/constants.h"
 #include "planner/verdict/caution_rules.h"
+#include "planner/water/saturation_line.h"
 
 namespace lossline::verdict {
 namespace {
@@ -40,7 +40,7 @@ void add_state_cautions(const CautionCase& c, std::vector<Caution>& out) {
                    "the air, end wetter, control on moisture or surface temperature",
                    where, deciding("trial"), false});
   const double boiling_margin =
-      373.124 - 28.0 * (1 - c.line.pressure / standard_pressure) - answer.hottest_temperature;
+      water::saturation_line::temperature(c.line.pressure) - answer.hottest_temperature;
   if (answer.evaporated > 0 &&
       (boiling_margin < near_boiling || answer.highest_overpressure > worth_a_burst_caution))
     out.push_back({"C15", "Pressure inside the product",
@@ -49,6 +49,11 @@ void add_state_cautions(const CautionCase& c, std::vector<Caution>& out) {
                                1e-3 * answer.highest_overpressure, answer.highest_overpressure_x,
                                c.card.permeability ? "" : ", permeability not known"),
                    "", deciding("trial on the real product"), false});
+  for (const CavityReport& cavity : c.solution.cavities)
+    for (const field::ValidityFlag& flag : cavity.validity)
+      if (flag.grade == field::ValidityGrade::unusable)
+        out.push_back({"C27", "Outside the model", flag.sentence, cavity.name,
+                       deciding("a field solution or a trial"), false});
   std::string outside;
   for (const EvidenceItem& item : c.solution.evidence)
     if (item.flags.has(flag::extrapolated | flag::clamped))

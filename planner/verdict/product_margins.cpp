@@ -73,7 +73,7 @@ const Rule overpressure{"overpressure inside", Measure::pressure,
 void add_field(const Case& c, double limit, const std::string& origin, const std::string& reason,
                std::vector<Margin>& out) {
   Margin m;
-  m.name = "field in the cavity, mean rms";
+  m.name = "field in cavity, mean rms";
   m.origin = origin;
   m.reason = reason;
   m.measure = Measure::field;

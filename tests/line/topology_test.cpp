@@ -33,7 +33,7 @@ TEST(Topology, NamesThePathThroughAMissingTrap) {
   Line line = sample::line();
   line.outlet_trap.reset();
   const Topology t = topology(line);
-  EXPECT_EQ(only(t).key, "outlet_trap");
+  EXPECT_EQ(only(t).key, "endtrap.outlet");
   EXPECT_THAT(t.open_paths, ElementsAre("cavity 2 -> cooling -> room (outlet)"));
   line.inlet_trap.reset();
   EXPECT_THAT(topology(line).open_paths, ElementsAre("cavity 1 -> preheat -> room (inlet)",
@@ -43,7 +43,7 @@ TEST(Topology, NamesThePathThroughAMissingTrap) {
 TEST(Topology, ATrapThatHoldsNothingBackIsNoTrap) {
   Line line = sample::line();
   line.inlet_trap->reflective_attenuation = line.inlet_trap->absorbing_attenuation = 0;
-  EXPECT_EQ(only(topology(line)).key, "inlet_trap");
+  EXPECT_EQ(only(topology(line)).key, "endtrap.inlet");
 }
 
 TEST(Topology, AnUnpoweredLineMayBeOpen) {
@@ -114,7 +114,7 @@ TEST(Topology, RefusesMoreAirThanTheSupplierLetsGo) {
 TEST(Topology, RefusesPowerIntoAPlaceThatIsNoCavity) {
   Line line = sample::line();
   line.generators[0].feeds[0].stretch = "cooling";
-  EXPECT_EQ(only(topology(line)).key, "generator[1].feed[1].stretch");
+  EXPECT_EQ(only(topology(line)).key, "generator[1].feeds[1]");
   line.generators[0].feeds[0].stretch = "attic";
   EXPECT_THAT(only(topology(line)).wrong, HasSubstr("'attic' is not the name of a stretch"));
 }
@@ -123,6 +123,7 @@ TEST(Topology, RefusesSharesThatDoNotAddUp) {
   Line line = sample::line();
   line.generators[0].feeds = {{"cavity 1", 0.5}, {"cavity 2", 0.4}};
   line.stretches[2].launchers = 2;
+  EXPECT_EQ(only(topology(line)).key, "generator[1].shares");
   EXPECT_THAT(only(topology(line)).wrong, HasSubstr("0.9"));
 }
 

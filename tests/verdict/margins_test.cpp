@@ -137,14 +137,11 @@ TEST(Margins, MeasureNamedSurfacesAgainstTheDewPoint) {
 TEST(Margins, RefuseWaterThatLeavesForLessThanItsHeat) {
   Solution s = sample::solved();
   s.answer.evaporated = 0.019;  // 116.77 kW / 0.019 kg/s = 6.1 MJ/kg
-  EXPECT_EQ(find(of(sample::solved_line(), s), "energy over heat of evaporation").standing,
-            Standing::within);
+  EXPECT_EQ(find(of(sample::solved_line(), s), "energy per water").standing, Standing::within);
   s.answer.evaporated = 0.19;  // 0.6 MJ/kg
-  EXPECT_EQ(find(of(sample::solved_line(), s), "energy over heat of evaporation").standing,
-            Standing::beyond);
+  EXPECT_EQ(find(of(sample::solved_line(), s), "energy per water").standing, Standing::beyond);
   s.product.reaction = 0.19 * 2.59e6;  // cure pays for it: credited
-  EXPECT_NE(find(of(sample::solved_line(), s), "energy over heat of evaporation").standing,
-            Standing::beyond);
+  EXPECT_NE(find(of(sample::solved_line(), s), "energy per water").standing, Standing::beyond);
 }
 
 TEST(Margins, NameTheBindingLimitFirst) {

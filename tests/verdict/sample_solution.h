@@ -1,6 +1,6 @@
 #pragma once
-// A solved line made by hand, small enough to check every margin by head: 1 kg/s dry solids on a
-// belt of 1 m at 0.1 m/s, one cavity of 2 m between two rest stretches.
+// A solved line made by hand, small enough to check every margin by head: 0.1 kg/s dry solids
+// on a belt of 1 m at 0.01 m/s, one cavity of 2 m between two rest stretches.
 
 #include "planner/march/solution.h"
 #include "tests/line/sample_line.h"
@@ -42,22 +42,23 @@ inline Solution solved() {
   s.reason = "converged in 9 rounds";
   s.version = "0.1.0";
   s.rounds = 9;
-  s.answer.flow = {1.0, 1.3, 0.1, 1.0, 0.05, 1.0, 10.0, 200.0};
+  s.answer.flow = {0.1, 0.13, 0.01, 1.0, 0.05, 1.0, 10.0, 200.0};
   s.answer.length = 6;
   s.answer.heated_length = 2;
-  s.answer.residence = 60;
-  s.answer.heated_residence = 20;
-  s.answer.feed_rate = 1.3;
-  s.answer.product_rate = 1.11;
-  s.answer.dry_solids = 1.0;
-  s.answer.evaporated = 0.19;
+  s.answer.residence = 600;
+  s.answer.heated_residence = 200;
+  s.answer.feed_rate = 0.13;
+  s.answer.product_rate = 0.111;
+  s.answer.dry_solids = 0.1;
+  s.answer.evaporated = 0.019;
   s.answer.final_moisture = s.answer.final_moisture_low = s.answer.final_moisture_high = 0.11;
   s.answer.final_temperature = 340;
   s.answer.hottest_temperature = 360;
   s.answer.hottest_x = 4;
   s.answer.share_of_forward = 0.85;
-  s.answer.mains_per_water = 71.77e3 / 0.019;
+  s.answer.mains_per_water = 116.77e3 / 0.019;
   s.answer.energy_per_water = s.answer.mains_per_water;
+  s.answer.mains_per_product = 116.77e3 / 0.111;
   s.answer.energy_floor = 2.59e6;
   s.profile = {station(0, 0, 0.30, 300), station(2, 0, 0.29, 320), station(2, 1, 0.29, 320),
                station(3, 1, 0.20, 345), station(4, 1, 0.12, 360), station(4, 2, 0.12, 360),
@@ -67,9 +68,9 @@ inline Solution solved() {
   s.profile[4].product_power = 25e3;
   s.profile[3].heating_rate = 0.05;
   s.profile[4].heating_rate = 0.2;
-  s.profile[3].drying_rate = 0.009;
+  s.profile[3].drying_rate = 0.0009;
   s.profile[3].overpressure = 300;
-  s.profile[3].evaporation = 0.09;
+  s.profile[3].evaporation = 0.009;
   CavityReport cavity;
   cavity.name = "cavity 1";
   cavity.stretch = 1;
@@ -111,7 +112,7 @@ inline Solution solved() {
   air.exhaust_dew_point = 308;
   air.heater_duty = air.heater_bought = 40e3;
   air.fan_power = 5e3;
-  air.water_taken = 0.19;
+  air.water_taken = 0.019;
   s.air = {air};
   s.ends = {{"inlet", 915e6, 50, 5, 0.05}, {"outlet", 915e6, 60, 6, 0.06}};
   s.topology = topology(solved_line());
