@@ -56,30 +56,4 @@ void BandMatrix::solve(std::span<double> x, std::size_t columns) const {
     for (std::size_t j = first(i); j < i; ++j) subtract(j, at(i, j), i);
 }
 
-bool solve_full(std::span<double> matrix, std::span<double> x) {
-  const std::size_t n = x.size();
-  auto at = [&](std::size_t i, std::size_t j) -> double& { return matrix[i * n + j]; };
-  for (std::size_t k = 0; k < n; ++k) {
-    std::size_t pivot = k;
-    for (std::size_t i = k + 1; i < n; ++i)
-      if (std::abs(at(i, k)) > std::abs(at(pivot, k))) pivot = i;
-    if (!(std::abs(at(pivot, k)) > 0) || !std::isfinite(at(pivot, k))) return false;
-    if (pivot != k) {
-      for (std::size_t j = k; j < n; ++j) std::swap(at(k, j), at(pivot, j));
-      std::swap(x[k], x[pivot]);
-    }
-    for (std::size_t i = k + 1; i < n; ++i) {
-      const double m = at(i, k) / at(k, k);
-      if (m == 0) continue;
-      for (std::size_t j = k + 1; j < n; ++j) at(i, j) -= m * at(k, j);
-      x[i] -= m * x[k];
-    }
-  }
-  for (std::size_t k = n; k-- > 0;) {
-    for (std::size_t j = k + 1; j < n; ++j) x[k] -= at(k, j) * x[j];
-    x[k] /= at(k, k);
-  }
-  return true;
-}
-
 }  // namespace lossline::field

@@ -42,11 +42,4 @@ class BandMatrix {
   std::vector<double> a_;
 };
 
-/// Solves the full system in place by elimination with partial pivoting.
-///
-///   matrix   n x n, row by row; destroyed
-///   x        right-hand side on entry, solution on return
-///   returns  false when the matrix is singular or not finite
-[[nodiscard]] bool solve_full(std::span<double> matrix, std::span<double> x);
-
 }  // namespace lossline::field

@@ -3,12 +3,14 @@
 #include <algorithm>
 #include <cmath>
 #include <limits>
+#include <utility>
 
 #include "planner/base/constants.h"
 #include "planner/base/error.h"
 #include "planner/field/band_matrix.h"
 #include "planner/field/conductor.h"
 #include "planner/field/range.h"
+#include "planner/numerics/dense.h"
 
 namespace lossline::field {
 namespace {
@@ -202,8 +204,10 @@ void Network::solve_mixed() {
     factors[i].solve(block, n_);
     for (std::size_t k = 0; k < n_ * n_; ++k) coupling[k] += weight * block[k];
   }
-  if (!solve_full(coupling, mean))
+  numerics::DenseFactor joint;
+  if (!joint.factor(std::move(coupling), n_))
     throw Error(ErrorKind::internal, "the mixing of the cavities is singular");
+  joint.solve(mean);
   for (std::size_t i = 0; i < classes_.size(); ++i) {
     const std::span<double> S = field(i);
     source(i, S);

@@ -1,11 +1,9 @@
 #include "planner/field/layered.h"
 
-#include <limits>
-
 #include "planner/base/constants.h"
-#include "planner/field/quadrature.h"
 #include "planner/field/range.h"
 #include "planner/field/stack_kernel.h"
+#include "planner/numerics/gauss_legendre.h"
 
 namespace lossline::field {
 namespace {
@@ -110,11 +108,13 @@ std::vector<double> depth_bins(double frequency, std::span<const Layer> layers,
 DiffuseResponse diffuse_response(double frequency, std::span<const Layer> layers,
                                  std::size_t nodes) {
   check(frequency, layers);
-  const Quadrature rule = gauss_legendre(nodes);
+  in_range("number of directions", static_cast<double>(nodes), "(1)", 1, 1000);
+  const auto rule = numerics::gauss_legendre(static_cast<int>(nodes), 0, 1);
   Tracer tracer(frequency, layers);
   DiffuseResponse out{0, 0, std::vector<double>(layers.size(), 0.0)};
   for (std::size_t i = 0; i < nodes; ++i) {
-    const double mu = rule.node[i], weight = rule.weight[i] * mu;  // half of 2 mu, per polarisation
+    const double mu = rule.nodes[i],
+                 weight = rule.weights[i] * mu;  // half of 2 mu, per polarisation
     tracer.turn_to(mu);
     for (const bool tm : {false, true}) {
       const kernel::Ends ends = tracer.solve(tm, false);
