@@ -178,14 +178,14 @@ void show_goldens(std::ostream& out, const std::vector<GoldenResult>& goldens) {
 }  // namespace
 
 void list(std::ostream& out, const Store& store) {
-  constexpr auto row = "{:<21}{:<38}{:<10}{:>5}{:>5}{:>5}{:>5}{:>5}{:>5}{:>5}\n";
+  constexpr auto row = "{:<21}{:<34}{:<10}{:>5}{:>5}{:>5}{:>5}{:>5}{:>5}{:>5}\n";
   out << "Evidence grade of what each card uses: A best, E guess or estimate, - nothing known.\n"
          "A star marks materials with data of your own.\n\n";
   out << fmt::format(row, "id", "name", "family", "eps", "heat", "sorp", "dens", "tran", "cure",
                      "lim");
   const auto grade = [](char c) { return std::string(1, c); };
   for (const MaterialSummary& m : store.list())
-    out << fmt::format(row, cut(m.id + (m.user_data ? "*" : ""), 20), cut(m.name, 37), m.family,
+    out << fmt::format(row, cut(m.id + (m.user_data ? "*" : ""), 20), cut(m.name, 33), m.family,
                        grade(m.permittivity), grade(m.heat), grade(m.sorption), grade(m.density),
                        grade(m.transport), grade(m.cure), grade(m.limits));
 }

@@ -53,8 +53,7 @@ std::optional<product::FoodComposition> read_composition(const Database& databas
   }
   if (!any) return std::nullopt;
   // Printed compositions rarely sum to exactly 1; the shares are of the sum.
-  const double sum =
-      out.water + out.protein + out.fat + out.carbohydrate + out.fibre + out.ash;
+  const double sum = out.water + out.protein + out.fat + out.carbohydrate + out.fibre + out.ash;
   for (double* share :
        {&out.water, &out.protein, &out.fat, &out.carbohydrate, &out.fibre, &out.ash})
     *share /= sum;

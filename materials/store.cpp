@@ -9,6 +9,7 @@
 #include "materials/card_builder.h"
 #include "materials/goldens.h"
 #include "planner/base/error.h"
+#include "planner/base/nearest.h"
 
 namespace lossline::materials {
 namespace {
@@ -61,29 +62,11 @@ void put_grades(MaterialSummary& out, const ProductCard& card) {
     out.limits = std::max(out.limits, limit.provenance.grade);
 }
 
-/// Number of single-letter edits between two words, for "did you mean".
-std::size_t edits(const std::string& a, const std::string& b) {
-  std::vector<std::size_t> row(b.size() + 1);
-  for (std::size_t j = 0; j <= b.size(); ++j) row[j] = j;
-  for (std::size_t i = 1; i <= a.size(); ++i) {
-    std::size_t diagonal = row[0];
-    row[0] = i;
-    for (std::size_t j = 1; j <= b.size(); ++j) {
-      const std::size_t change = diagonal + (a[i - 1] == b[j - 1] ? 0 : 1);
-      diagonal = row[j];
-      row[j] = std::min({row[j] + 1, row[j - 1] + 1, change});
-    }
-  }
-  return row[b.size()];
-}
-
 [[noreturn]] void unknown_material(const std::string& id, const std::vector<std::string>& known) {
-  std::string near;
-  for (const std::string& other : known)
-    if (edits(id, other) <= 2 || other.find(id) != std::string::npos)
-      near += (near.empty() ? "; did you mean " : ", ") + other;
+  const std::string near = nearest(id, known);
   throw Error(ErrorKind::not_found, "material '" + id + "' is not in the database" +
-                                        (near.empty() ? "; see 'lossline materials list'" : near));
+                                        (near.empty() ? "; see 'lossline materials list'"
+                                                      : "; did you mean '" + near + "'?"));
 }
 
 }  // namespace

@@ -44,7 +44,7 @@ class Store {
 
   /// All materials, sorted by id.
   [[nodiscard]] std::vector<MaterialSummary> list() const;
-  /// The product card; throws Error not_found naming similar ids for an unknown material.
+  /// The product card; throws Error not_found naming the nearest id for an unknown material.
   [[nodiscard]] ProductCard card(const std::string& id) const;
   /// Everything about one material; throws as card().
   [[nodiscard]] MaterialDescription describe(const std::string& id) const;

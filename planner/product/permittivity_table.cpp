@@ -111,19 +111,21 @@ PermittivityTable::Pair PermittivityTable::transformed(std::complex<double> eps)
 PermittivityTable::Pair PermittivityTable::along_moisture(const Row& row, double X,
                                                           Flags& flags) const {
   const double lo = row.X.front(), hi = row.X.back(), span = hi - lo;
-  if (X <= lo) {
-    if (X < lo) flags |= flag::extrapolated;
-    if (X == lo || !dry_) return row.value.front();
+  if (X < lo) {
+    flags |= flag::extrapolated;
+    if (!dry_) return row.value.front();
     const double share = X / lo;
     return {dry_->re + share * (row.value.front().re - dry_->re),
             dry_->im + share * (row.value.front().im - dry_->im)};
   }
-  if (X >= hi) {
+  if (X > hi) {
     // With a single moisture the span is zero: any other moisture is beyond the allowance.
-    if (X > hi) flags |= X - hi <= allowance_share * span ? flag::extrapolated : flag::clamped;
+    flags |= X - hi <= allowance_share * span ? flag::extrapolated : flag::clamped;
     return row.value.back();
   }
+  if (span == 0) return row.value.front();
   if (std::min(X - lo, hi - X) < edge_share * span) flags |= flag::edge;
+  if (X == hi) return row.value.back();
   const auto upper = std::upper_bound(row.X.begin(), row.X.end(), X);
   const auto i = static_cast<std::size_t>(upper - row.X.begin()) - 1;
   const double h = row.X[i + 1] - row.X[i], t = (X - row.X[i]) / h;
