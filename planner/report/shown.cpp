@@ -20,7 +20,7 @@ struct Unit {
 constexpr double foot = 0.3048, pound = 0.45359237, psi = 6894.757293, kWh = 3.6e6;
 
 Unit unit_of(Shown kind, UnitSet set) {
-  const bool si = set == UnitSet::si;
+  const bool si = set == UnitSet::si_engineering;
   auto choose = [&](Unit a, Unit b) { return si ? a : b; };
   switch (kind) {
     case Shown::temperature:
@@ -69,11 +69,11 @@ Unit unit_of(Shown kind, UnitSet set) {
 double in_unit(Shown kind, double si, UnitSet units) {
   const double value = si * unit_of(kind, units).scale;
   if (kind != Shown::temperature) return value;
-  return units == UnitSet::si ? value - celsius_zero : value - 459.67;
+  return units == UnitSet::si_engineering ? value - celsius_zero : value - 459.67;
 }
 
 std::string unit_name(Shown kind, const Setting& setting) {
-  const bool si = setting.units == UnitSet::si;
+  const bool si = setting.units == UnitSet::si_engineering;
   const char* degree = setting.unicode ? "\u00b0" : "deg";
   if (kind == Shown::temperature) return std::string(degree) + (si ? "C" : "F");
   if (!si && (kind == Shown::temperature_step || kind == Shown::heating_rate))

@@ -1,17 +1,13 @@
 #pragma once
-// Numbers for people: the two unit sets, and figures cut to what an engineer reads. Machines read
-// JSON, which is SI throughout.
+// Numbers for people: the two unit sets of planner/base/quantity.h, cut to the three figures an
+// engineer reads, in units fit for a table. Machines read JSON, which is SI throughout.
 
 #include <string>
 
+#include "planner/base/quantity.h"
 #include "planner/verdict/margins.h"
 
 namespace lossline::report {
-
-enum class UnitSet {
-  si,  ///< kg/h, m, mm, degC, kW, kPa
-  us,  ///< lb/h, ft, in, degF, kW, psi
-};
 
 /// What a number is, which decides the unit it is shown in.
 enum class Shown {
@@ -38,7 +34,7 @@ enum class Shown {
 
 /// How the page is set.
 struct Setting {
-  UnitSet units = UnitSet::si;
+  UnitSet units = UnitSet::si_engineering;
   bool unicode = false;  ///< otherwise plain ASCII
 };
 

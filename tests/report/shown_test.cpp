@@ -10,15 +10,15 @@ namespace lossline::report {
 namespace {
 
 TEST(Shown, ConvertsToBothUnitSets) {
-  EXPECT_NEAR(in_unit(Shown::temperature, 373.15, UnitSet::si), 100, 1e-9);
-  EXPECT_NEAR(in_unit(Shown::temperature, 373.15, UnitSet::us), 212, 1e-9);
-  EXPECT_NEAR(in_unit(Shown::mass_rate, 1.0, UnitSet::us), 7936.641, 1e-3);
-  EXPECT_NEAR(in_unit(Shown::speed, 0.01, UnitSet::us), 1.968504, 1e-6);
-  EXPECT_NEAR(in_unit(Shown::pressure, 101325, UnitSet::us), 14.69595, 1e-5);
-  EXPECT_NEAR(in_unit(Shown::heating_rate, 1.0 / 60, UnitSet::us), 1.8, 1e-12);
-  EXPECT_NEAR(in_unit(Shown::energy_per_mass, 3.6e6, UnitSet::us), 0.45359237, 1e-12);
-  EXPECT_NEAR(in_unit(Shown::energy_per_product, 3.6e6, UnitSet::us), 907.18474, 1e-8);
-  EXPECT_NEAR(in_unit(Shown::areal_mass, 1.0, UnitSet::us), 0.204816, 1e-6);
+  EXPECT_NEAR(in_unit(Shown::temperature, 373.15, UnitSet::si_engineering), 100, 1e-9);
+  EXPECT_NEAR(in_unit(Shown::temperature, 373.15, UnitSet::us_customary), 212, 1e-9);
+  EXPECT_NEAR(in_unit(Shown::mass_rate, 1.0, UnitSet::us_customary), 7936.641, 1e-3);
+  EXPECT_NEAR(in_unit(Shown::speed, 0.01, UnitSet::us_customary), 1.968504, 1e-6);
+  EXPECT_NEAR(in_unit(Shown::pressure, 101325, UnitSet::us_customary), 14.69595, 1e-5);
+  EXPECT_NEAR(in_unit(Shown::heating_rate, 1.0 / 60, UnitSet::us_customary), 1.8, 1e-12);
+  EXPECT_NEAR(in_unit(Shown::energy_per_mass, 3.6e6, UnitSet::us_customary), 0.45359237, 1e-12);
+  EXPECT_NEAR(in_unit(Shown::energy_per_product, 3.6e6, UnitSet::us_customary), 907.18474, 1e-8);
+  EXPECT_NEAR(in_unit(Shown::areal_mass, 1.0, UnitSet::us_customary), 0.204816, 1e-6);
 }
 
 TEST(Shown, CutsToThreeFigures) {

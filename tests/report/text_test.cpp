@@ -24,7 +24,7 @@ TEST(TextPage, FitsATerminal) {
   sample::WholePage whole;
   whole.line.limits.product_temperature = 370;
   for (const bool unicode : {false, true}) {
-    for (const UnitSet units : {UnitSet::si, UnitSet::us}) {
+    for (const UnitSet units : {UnitSet::si_engineering, UnitSet::us_customary}) {
       std::istringstream page(text(whole.page(), {units, unicode}));
       int count = 0;
       for (std::string line; std::getline(page, line); ++count)
@@ -36,7 +36,7 @@ TEST(TextPage, FitsATerminal) {
 
 TEST(TextPage, IsPlainAsciiWhenAsked) {
   sample::WholePage whole;
-  const std::string page = text(whole.page(), {UnitSet::si, false});
+  const std::string page = text(whole.page(), {UnitSet::si_engineering, false});
   EXPECT_TRUE(std::all_of(page.begin(), page.end(),
                           [](char c) { return c == '\n' || (c >= ' ' && c <= '~'); }));
 }
@@ -63,7 +63,7 @@ TEST(TextPage, ShowsEveryLimitThatIsNotWithin) {
 
 TEST(TextPage, SpeaksUsCustomaryUnits) {
   sample::WholePage whole;
-  const std::string page = text(whole.page(), {UnitSet::us, false});
+  const std::string page = text(whole.page(), {UnitSet::us_customary, false});
   EXPECT_THAT(page, HasSubstr("lb/h"));
   EXPECT_THAT(page, HasSubstr("degF"));
   EXPECT_THAT(page, HasSubstr("ft/min"));
