@@ -37,6 +37,7 @@ struct Surroundings {
   bool through = false;                 ///< air flows up through the bed
   double through_flow = 0;              ///< dry air per covered area [kg/(m2 s)]
   double piece_heat = 0;                ///< film coefficient of a granule [W/(m2 K)]
+  double surface_guess = -1;            ///< surface moisture nearby, to save work; negative = none
 };
 
 /// Flows from product to air per covered area, and the surface state behind them.
@@ -79,10 +80,15 @@ struct SurfaceBalance {
   }
 };
 
-/// Solves the surface balance for the surface moisture, in plain numbers; `slope` receives the
-/// derivative of the residual at the solution.
+/// Solves the surface balance for the surface moisture, in plain numbers.
+///
+///   guess    a nearby solution, negative for none; only the cost depends on it
+///   slope    receives the derivative of the residual at the solution
+/// The residual falls all the way, so the root is the only one: Newton from the guess, and a
+/// bracketed Newton where that strays.
 inline double surface_moisture(const product::Sorption& sorption, const SurfaceBalance<double>& b,
-                               double& slope) {
+                               double guess, double& slope) {
+  constexpr double close = 1e-13;
   auto residual = [&](double Xs) {
     const auto x = numerics::Dual<1>::variable(Xs, 0);
     const auto p = activity(sorption, x, numerics::Dual<1>(b.T)) * b.psat;
@@ -90,19 +96,27 @@ inline double surface_moisture(const product::Sorption& sorption, const SurfaceB
     slope = r.slope[0];
     return r.value;
   };
+  double Xs = guess;
+  for (int i = 0; i < 12 && Xs >= 0; ++i) {
+    const double r = residual(Xs);
+    if (!(slope < 0)) break;
+    const double next = Xs - r / slope;
+    if (std::abs(next - Xs) <= close * (1 + std::abs(Xs))) return std::max(next, 0.0);
+    Xs = next;
+  }
   double low = 0, high = std::max(b.X, 1e-9);
   if (!(residual(low) > 0)) return low;
   for (int i = 0; i < 60 && residual(high) > 0; ++i) {
     low = high;
     high *= 2;
   }
-  double Xs = std::clamp(b.X, low, high);
+  Xs = std::clamp(b.X, low, high);
   for (int i = 0; i < 80; ++i) {
     const double r = residual(Xs);
     (r > 0 ? low : high) = Xs;
     double next = slope < 0 ? Xs - r / slope : 0.5 * (low + high);
     if (!(next > low && next < high)) next = 0.5 * (low + high);
-    if (std::abs(next - Xs) <= 1e-14 * (1 + std::abs(Xs))) return next;
+    if (std::abs(next - Xs) <= close * (1 + std::abs(Xs))) return next;
     Xs = next;
   }
   return Xs;
@@ -110,13 +124,14 @@ inline double surface_moisture(const product::Sorption& sorption, const SurfaceB
 
 /// The surface moisture; for duals with its derivatives by the implicit function theorem: one
 /// Newton step in duals from the solved point.
-inline double solved_surface(const product::Sorption& sorption, const SurfaceBalance<double>& b) {
+inline double solved_surface(const product::Sorption& sorption, const SurfaceBalance<double>& b,
+                             double guess) {
   double slope = 0;
-  return surface_moisture(sorption, b, slope);
+  return surface_moisture(sorption, b, guess, slope);
 }
 template <int N>
 numerics::Dual<N> solved_surface(const product::Sorption& sorption,
-                                 const SurfaceBalance<numerics::Dual<N>>& b) {
+                                 const SurfaceBalance<numerics::Dual<N>>& b, double guess) {
   using D = numerics::Dual<N>;
   double slope = 0;
   const double Xs =
@@ -124,7 +139,7 @@ numerics::Dual<N> solved_surface(const product::Sorption& sorption,
                        SurfaceBalance<double>{b.liquid.value, b.vapour.value, b.psi_mean.value,
                                               b.outside.value, b.potential_air.value, b.X.value,
                                               b.T.value, b.psat.value, b.P, b.through},
-                       slope);
+                       guess, slope);
   D residual = b.template residual<D>(D(Xs), activity(sorption, D(Xs), b.T) * b.psat);
   residual.value = 0;
   return D(Xs) - residual / slope;
@@ -133,14 +148,14 @@ numerics::Dual<N> solved_surface(const product::Sorption& sorption,
 /// Completes the balance, solves it, and returns the vapour flow into the air [kg/(m2 s)].
 template <class S>
 S solve_film(const BedMaterial& material, SurfaceBalance<S>& b, const S& X, const S& T,
-             const S& psat, const S& air_Y, double P, bool through, S& surface) {
+             const S& psat, const S& air_Y, double P, bool through, double guess, S& surface) {
   b.X = X;
   b.T = T;
   b.psat = psat;
   b.P = P;
   b.through = through;
   b.potential_air = b.outside_potential(vapour_pressure(air_Y, P));
-  surface = solved_surface(*material.sorption, b);
+  surface = solved_surface(*material.sorption, b, guess);
   const S p = activity(*material.sorption, surface, T) * psat;
   return b.outside * (b.outside_potential(p) - b.potential_air);
 }
@@ -174,7 +189,8 @@ Exchange<S> surface_exchange(const BedMaterial& material, const Surroundings& ar
     b.vapour = inside * pore_diffusion(material, moist, T, P);
     b.psi_mean = diffusion_potential(p, P);
     b.outside = S(beta);
-    film = solve_film(material, b, X, T, psat, air_Y, P, false, out.surface_moisture);
+    film = solve_film(material, b, X, T, psat, air_Y, P, false, around.surface_guess,
+                      out.surface_moisture);
   } else {
     out.surface_moisture = X;
   }
@@ -219,7 +235,8 @@ Exchange<S> through_exchange(const BedMaterial& material, const Surroundings& ar
   b.vapour = inside * pore_diffusion(material, moist, T, P);
   b.psi_mean = diffusion_potential(p, P);
   b.outside = S(beta);
-  const S film = solve_film(material, b, X, T, psat, air_Y, P, true, out.surface_moisture);
+  const S film = solve_film(material, b, X, T, psat, air_Y, P, true, around.surface_guess,
+                            out.surface_moisture);
   out.water = film + inside * pressure_flow(material, moist, T, out.over, P) * out.over;
   out.heat = G * capacity * (air_T - T) * approach_heat;
   out.enthalpy = out.water * water::vapour_enthalpy(T) - out.heat;

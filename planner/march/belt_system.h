@@ -45,11 +45,11 @@ enum class AirMode { given, with_belt, lagged };
 /// The segment being integrated.
 struct BeltSystem {
   const bed::BedMaterial* material = nullptr;
-  bed::Surroundings around;
-  double speed = 1;          ///< [m/s]
-  double covered_width = 1;  ///< [m]
-  double x0 = 0, x1 = 1;     ///< [m]
-  double q0 = 0, q1 = 0;     ///< field heat at the two ends [W/m2 covered]
+  mutable bed::Surroundings around;  ///< mutable for its surface_guess alone
+  double speed = 1;                  ///< [m/s]
+  double covered_width = 1;          ///< [m]
+  double x0 = 0, x1 = 1;             ///< [m]
+  double q0 = 0, q1 = 0;             ///< field heat at the two ends [W/m2 covered]
   AirMode mode = AirMode::given;
   Air air0, air1;       ///< at the two ends; air0 alone when given
   double air_flow = 0;  ///< dry air along the belt, for with_belt [kg/s]
@@ -74,7 +74,8 @@ struct BeltSystem {
     }
   }
 
-  /// Exchange with the air at one place; also for reports.
+  /// Exchange with the air at one place; also for reports. Remembers the surface moisture as the
+  /// next evaluation's guess, so one system serves one thread.
   template <class S>
   [[nodiscard]] bed::Exchange<S> exchange(const S& x, const S& moisture, const S& T, const S& H,
                                           const S& Y) const {
@@ -87,8 +88,11 @@ struct BeltSystem {
       air_T = air0.T + (air1.T - air0.T) * s;
       humidity = air0.Y + (air1.Y - air0.Y) * s;
     }
-    return around.through ? bed::through_exchange(*material, around, moisture, T, air_T, humidity)
-                          : bed::surface_exchange(*material, around, moisture, T, air_T, humidity);
+    bed::Exchange<S> out =
+        around.through ? bed::through_exchange(*material, around, moisture, T, air_T, humidity)
+                       : bed::surface_exchange(*material, around, moisture, T, air_T, humidity);
+    around.surface_guess = numerics::plain(out.surface_moisture);
+    return out;
   }
 
   [[nodiscard]] double cure_rate(double a, double T) const {

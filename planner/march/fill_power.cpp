@@ -22,7 +22,7 @@ double heat_received(const Setup& setup, const LastRound& last, std::size_t cavi
   return sum * setup.covered_width();
 }
 
-void describe_field(const Setup& setup, const LastRound& last, std::size_t c,
+void describe_field(const Setup& setup, const LastRound& last, std::size_t c, std::size_t offset,
                     CavityReport& report) {
   const field::CavityInput& input = last.field.inputs[c];
   const field::CavityResult& result = last.field.results[c];
@@ -61,6 +61,9 @@ void describe_field(const Setup& setup, const LastRound& last, std::size_t c,
   valid.bed_depth = setup.depth(last.pass.nodes[last_node][X]);
   valid.modal_overlap = report.modal_overlap;
   valid.bed_share = report.launched > 0 ? report.bed / report.launched : 0.0;
+  valid.bed_absorptance = field::mean_bed_absorptance(
+      setup.classes,
+      last.field.stations[offset + setup.grid.count[setup.cavities[c].stretch]].optics);
   report.validity = field::validity_flags(valid);
 }
 
@@ -81,7 +84,7 @@ void fill_cavities(const Setup& setup, const LastRound& last, Solution& out) {
     report.launched = cavity.launched;
     report.bed = heat_received(setup, last, c, offset);
     if (field) {
-      describe_field(setup, last, c, report);
+      describe_field(setup, last, c, offset, report);
       report.share_unmixed = unmixed[c];
       report.share_mixed = mixed[c];
       report.share_low = field::cautious_bed_share(unmixed[c]);

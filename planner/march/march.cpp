@@ -68,7 +68,7 @@ LastRound iterate(const Setup& setup, const SolveOptions& options, Solution& out
   double mean_heat = 0;
   for (const double q : last.iterate.heat) mean_heat = std::max(mean_heat, q);
   const Scales scales{mean_heat > 0 ? mean_heat : 1.0};
-  numerics::Anderson anderson(5);
+  numerics::Anderson anderson;
   Iterate z = last.iterate;
   out.status = Status::not_converged;
   for (out.rounds = 1; out.rounds <= options.most_rounds; ++out.rounds) {

@@ -83,9 +83,10 @@ Pass march_belt(const Setup& setup, const Iterate& z) {
   // Co-flow air waits here while the belt runs through stretches of other loops.
   std::vector<std::optional<std::array<double, 2>>> carried(setup.line.air.size());
   std::size_t air_loop = Setup::no_loop;
-  double h = 0;
+  double h = 0, surface_guess = -1;
   for (std::size_t i = 0; i < setup.grid.segments.size(); ++i) {
     const BeltSystem system = segment_system(setup, z, i);
+    system.around.surface_guess = surface_guess;
     const double span = system.x1 - system.x0;
     const std::size_t loop = setup.loop_of[setup.grid.segments[i].stretch];
     if (system.mode == AirMode::with_belt && loop != air_loop) {
@@ -108,6 +109,7 @@ Pass march_belt(const Setup& setup, const Iterate& z) {
                       system.x1, setup.line.stretches[setup.grid.segments[i].stretch].name);
       return pass;
     }
+    surface_guess = system.around.surface_guess;
     const double width = setup.covered_width();
     pass.flows.push_back({y[water_out] * width, y[enthalpy_out] * width, y[air_heat] * width});
     pass.nodes.push_back(y);
