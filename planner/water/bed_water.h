@@ -75,6 +75,14 @@ S fast_saturation_pressure(const S& T) {
   return c::cold_p * exp(c::frozen_log + c::frozen_slope * (T - c::frozen_T));
 }
 
+/// The same for a dual: one derivative of the equation, carried to all directions by the chain
+/// rule.
+template <int N>
+requires(N > 1) numerics::Dual<N> fast_saturation_pressure(const numerics::Dual<N>& T) {
+  const auto p = fast_saturation_pressure(numerics::Dual<1>::variable(T.value, 0));
+  return numerics::chain(T, p.value, p.slope[0]);
+}
+
 /// The inverse of fast_saturation_pressure [K] for every p > 0 [Pa].
 template <class S>
 S fast_boiling_temperature(const S& p) {

@@ -7,6 +7,7 @@
 #include <limits>
 
 #include "planner/base/error.h"
+#include "tests/numerics/sweep.h"
 
 namespace lossline::numerics {
 
@@ -27,7 +28,7 @@ TEST(MonotoneCubic, GoesThroughItsPoints) {
 TEST(MonotoneCubic, RisesWithRisingPointsAndNeverOvershoots) {
   const MonotoneCubic curve(rpn_x, rpn_y, Outside::hold);
   double before = -1;
-  for (double x = 7.99; x <= 20; x += 1e-3) {
+  for (const double x : test::sweep(7.99, 20, 1e-3)) {
     const ValueSlope here = curve.at(x);
     EXPECT_GE(here.value, before - 1e-15) << x;
     EXPECT_GE(here.slope, -1e-13) << x;
@@ -40,7 +41,7 @@ TEST(MonotoneCubic, StaysBetweenNeighboursForPointsThatTurn) {
   const std::vector<double> x{0, 1, 1.5, 4, 4.2, 6}, y{1, 3, -2, -2, 5, 0};
   const MonotoneCubic curve(x, y, Outside::tangent);
   for (std::size_t i = 0; i + 1 < x.size(); ++i)
-    for (double s = 0; s <= 1; s += 0.01) {
+    for (const double s : test::sweep(0, 1, 0.01)) {
       const double v = curve(x[i] + s * (x[i + 1] - x[i]));
       EXPECT_GE(v, std::min(y[i], y[i + 1]) - 1e-14);
       EXPECT_LE(v, std::max(y[i], y[i + 1]) + 1e-14);
@@ -49,12 +50,12 @@ TEST(MonotoneCubic, StaysBetweenNeighboursForPointsThatTurn) {
 
 TEST(MonotoneCubic, ReproducesAStraightLineAndHasTheSlopeOfItsValues) {
   const MonotoneCubic line({0, 0.3, 2, 5}, {1, 1.6, 5, 11}, Outside::tangent);
-  for (double x = -2; x < 8; x += 0.37) {
+  for (const double x : test::sweep(-2, 8, 0.37)) {
     EXPECT_NEAR(line(x), 1 + 2 * x, 1e-13);
     EXPECT_NEAR(line.at(x).slope, 2, 1e-13);
   }
   const MonotoneCubic curve(rpn_x, rpn_y, Outside::hold);
-  for (double x = 8; x < 20; x += 0.0137) {
+  for (const double x : test::sweep(8, 20, 0.0137)) {
     const double h = 1e-6;
     if (std::any_of(rpn_x.begin(), rpn_x.end(), [&](double p) { return std::abs(p - x) < h; }))
       continue;

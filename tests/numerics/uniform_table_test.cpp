@@ -6,6 +6,7 @@
 #include <limits>
 
 #include "planner/base/error.h"
+#include "tests/numerics/sweep.h"
 
 namespace lossline::numerics {
 
@@ -16,7 +17,7 @@ ValueSlope wave(double x) {
 double worst(std::size_t n) {
   const UniformTable table = UniformTable::of(wave, 0, 3, n, Outside::hold);
   double error = 0;
-  for (double x = 0; x <= 3; x += 1e-3)
+  for (const double x : test::sweep(0, 3, 1e-3))
     error = std::max(error, std::abs(table.at(x).value - std::sin(x)));
   return error;
 }
@@ -24,7 +25,7 @@ double worst(std::size_t n) {
 TEST(UniformTable, ReproducesACubicExactly) {
   const auto cubic = [](double x) { return ValueSlope{1 - 2 * x + x * x * x, -2 + 3 * x * x}; };
   const UniformTable table = UniformTable::of(cubic, -1, 2, 7, Outside::hold);
-  for (double x = -1; x <= 2; x += 0.01) {
+  for (const double x : test::sweep(-1, 2, 0.01)) {
     EXPECT_NEAR(table.at(x).value, cubic(x).value, 1e-14);
     EXPECT_NEAR(table.at(x).slope, cubic(x).slope, 1e-13);
   }

@@ -12,6 +12,7 @@
 #include "planner/base/constants.h"
 #include "planner/water/permittivity.h"
 #include "planner/water/salt_permittivity.h"
+#include "tests/numerics/sweep.h"
 #include "tests/published/product_csv.h"
 
 namespace lossline::water {
@@ -110,7 +111,7 @@ TEST(PureWater, MatchesTheTableOfAnIndependentProgram) {
 TEST(PureWater, LosesLessWhenWarmer) {
   for (const double f : {0.915e9, 2.45e9}) {
     double before = 100;
-    for (double celsius = 0; celsius <= 60; celsius += 1) {
+    for (const double celsius : test::sweep(0, 60, 1)) {
       const double loss = -pure_water_ellison(f, K(celsius)).imag();
       EXPECT_LT(loss, before) << celsius;
       EXPECT_LT(-pure_water_kaatze(f, K(celsius + 0.5), any).imag(),

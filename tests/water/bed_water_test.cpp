@@ -5,6 +5,7 @@
 #include <cmath>
 
 #include "planner/water/if97.h"
+#include "tests/numerics/sweep.h"
 
 namespace lossline::water {
 
@@ -12,14 +13,14 @@ using Dual = numerics::Dual<1>;
 
 // The fits state 0.07 % for the heat of evaporation from 0 to 150 degC.
 TEST(BedWater, HasTheHeatOfEvaporationOfIf97WithinItsStatedFit) {
-  for (double T = 273.15; T <= 423.15; T += 0.5)
+  for (const double T : test::sweep(273.15, 423.15, 0.5))
     EXPECT_NEAR((vapour_enthalpy(T) - liquid_enthalpy(T)) / latent_heat(T), 1, 7e-4) << T;
 }
 
 TEST(BedWater, StaysWithinTheStatedDeviationsOfEitherPhase) {
-  for (double T = 273.15; T <= 373.15; T += 0.5)
+  for (const double T : test::sweep(273.15, 373.15, 0.5))
     EXPECT_NEAR(liquid_enthalpy(T), saturated_liquid_enthalpy(T), 290) << T;
-  for (double T = 273.15; T <= 423.15; T += 0.5) {
+  for (const double T : test::sweep(273.15, 423.15, 0.5)) {
     EXPECT_NEAR(liquid_enthalpy(T), saturated_liquid_enthalpy(T), 3800) << T;
     EXPECT_NEAR(vapour_enthalpy(T), saturated_vapour_enthalpy(T), 2800) << T;
   }
@@ -34,7 +35,7 @@ TEST(BedWater, VapourEnthalpyIsSmoothWhereTheFitEnds) {
 }
 
 TEST(FastSaturationPressure, IsIf97InsideItsRange) {
-  for (double T = 273.15; T <= 640; T += 1)
+  for (const double T : test::sweep(273.15, 640, 1))
     EXPECT_EQ(fast_saturation_pressure(T), saturation_pressure(T)) << T;
 }
 
@@ -49,7 +50,7 @@ TEST(FastSaturationPressure, IsSmoothWhereTheEquationHandsOver) {
 
 TEST(FastSaturationPressure, IsPositiveAndIncreasingForEveryTemperature) {
   double before = 0;
-  for (double T = -200; T < 5000; T += 0.5) {
+  for (const double T : test::sweep(-200, 5000, 0.5)) {
     const double p = fast_saturation_pressure(T);
     EXPECT_GT(p, before) << T;
     before = p;
@@ -65,8 +66,17 @@ TEST(FastSaturationPressure, HasItsOwnDerivativeInDuals) {
   }
 }
 
+TEST(FastSaturationPressure, CarriesEveryDirectionOfADual) {
+  numerics::Dual<3> T(350.0);
+  T.slope = {1, -2, 0.5};
+  const numerics::Dual<3> p = fast_saturation_pressure(T);
+  const Dual one = fast_saturation_pressure(Dual::variable(350, 0));
+  EXPECT_EQ(p.value, one.value);
+  for (std::size_t i = 0; i < 3; ++i) EXPECT_NEAR(p.slope[i] / one.slope[0], T.slope[i], 1e-14);
+}
+
 TEST(FastBoilingTemperature, UndoesFastSaturationPressure) {
-  for (double T = 20; T < 1000; T += 1.3)
+  for (const double T : test::sweep(20, 1000, 1.3))
     EXPECT_NEAR(fast_boiling_temperature(fast_saturation_pressure(T)) / T, 1, 1e-11) << T;
   const Dual p = fast_saturation_pressure(Dual::variable(350, 0));
   EXPECT_NEAR(fast_boiling_temperature(p).slope[0], 1, 1e-10);

@@ -5,13 +5,14 @@
 #include <limits>
 
 #include "planner/base/error.h"
+#include "tests/numerics/sweep.h"
 
 namespace lossline::water {
 
 constexpr double nan = std::numeric_limits<double>::quiet_NaN();
 
 TEST(SaturationPressure, IsUndoneBySaturationTemperature) {
-  for (double T = 274; T <= 646; T += 1)
+  for (const double T : test::sweep(274, 646, 1))
     EXPECT_NEAR(saturation_temperature(saturation_pressure(T)) / T, 1, 1e-12) << T;
 }
 
@@ -53,7 +54,7 @@ TEST(PhaseState, ObeysItsThermodynamicIdentities) {
 // Clausius-Clapeyron: dp/dT = latent heat / (T (v'' - v')). Regions 1, 2 and 4 of the formulation
 // are separate fits that agree on the boiling line to about 0.01 %.
 TEST(LatentHeat, AgreesWithTheSlopeOfTheBoilingLine) {
-  for (double T = 280; T <= 600; T += 20) {
+  for (const double T : test::sweep(280, 600, 20)) {
     const double p = saturation_pressure(T);
     const double slope = (saturation_pressure(T + 0.01) - saturation_pressure(T - 0.01)) / 0.02;
     const double volume = vapour_state(T, p).volume - liquid_state(T, p).volume;

@@ -9,6 +9,7 @@
 #include "planner/base/error.h"
 #include "planner/water/bed_water.h"
 #include "planner/water/if97.h"
+#include "tests/numerics/sweep.h"
 
 namespace lossline::water {
 
@@ -17,13 +18,13 @@ constexpr double P = standard_pressure;
 
 // Hyland-Wexler (used by ASHRAE) and IAPWS differ by up to 0.04 % from 0 to 200 degC.
 TEST(MoistAirSaturationPressure, AgreesWithTheSteamTables) {
-  for (double T = 273.16; T <= 473.15; T += 1)
+  for (const double T : test::sweep(273.16, 473.15, 1))
     EXPECT_NEAR(moist_air_saturation_pressure(T) / saturation_pressure(T), 1, 5e-4) << T;
 }
 
 TEST(MoistAirSaturationPressure, RisesThroughTheTriplePointWithoutAJump) {
   double before = 0;
-  for (double T = moist_air_T_min; T <= moist_air_T_max; T += 0.05) {
+  for (const double T : test::sweep(moist_air_T_min, moist_air_T_max, 0.05)) {
     EXPECT_GT(moist_air_saturation_pressure(T), before) << T;
     before = moist_air_saturation_pressure(T);
   }
@@ -33,7 +34,7 @@ TEST(MoistAirSaturationPressure, RisesThroughTheTriplePointWithoutAJump) {
 
 TEST(MoistAir, HumidityMeasuresUndoOneAnother) {
   for (const double p : {20e3, 84.5e3, P})
-    for (double T = 243.15; T < 423; T += 9.7)
+    for (const double T : test::sweep(243.15, 423, 9.7))
       for (const double rh : {0.03, 0.2, 0.5, 0.8}) {
         if (rh * moist_air_saturation_pressure(T) > 0.9 * p) continue;
         const double W = humidity_ratio_from_relative_humidity(T, rh, p);
@@ -54,7 +55,7 @@ TEST(DewPoint, IsTheLowestTemperatureForDryAir) {
 
 TEST(AirEnthalpy, IsUndoneByAirTemperature) {
   for (const double Y : {0.0, 1e-3, 0.02, 0.4, 5.0})
-    for (double T = 230; T < 700; T += 7.3)
+    for (const double T : test::sweep(230, 700, 7.3))
       EXPECT_NEAR(air_temperature(air_enthalpy(T, Y), Y), T, 1e-9) << Y;
 }
 

@@ -8,6 +8,7 @@
 #include "planner/base/constants.h"
 #include "planner/base/error.h"
 #include "planner/water/salt_permittivity.h"
+#include "tests/numerics/sweep.h"
 
 namespace lossline::water {
 
@@ -20,7 +21,7 @@ TEST(PureWater, ModelsAgreeWhereTheirRangesMeet) {
   struct Band {
     double frequency, spread;
   };
-  for (double T = 273.15; T <= 313.15; T += 1)
+  for (const double T : test::sweep(273.15, 313.15, 1))
     for (const Band& band : {Band{0.915e9, 0.01}, Band{2.45e9, 0.01}, Band{5.8e9, 0.018}}) {
       const double f = band.frequency;
       const std::complex<double> e = pure_water_ellison(f, T);
@@ -34,7 +35,7 @@ TEST(PureWater, ModelsAgreeWhereTheirRangesMeet) {
 
 TEST(PureWater, EllisonStaysSmoothAndLossyWhenExtrapolated) {
   double before = -pure_water_ellison(2.45e9, 373.15).imag();
-  for (double T = 374; T <= extrapolation_T_max; T += 1) {
+  for (const double T : test::sweep(374, extrapolation_T_max, 1)) {
     const std::complex<double> e = pure_water_ellison(2.45e9, T, Beyond::extrapolate);
     EXPECT_GT(e.real(), 30);
     EXPECT_GT(-e.imag(), 0);
@@ -64,7 +65,7 @@ TEST(PureWater, RefusesWhatIsOutsideTheStatedRange) {
 }
 
 TEST(SaltWater, IsPureWaterWithoutSalt) {
-  for (double T = 278.15; T <= 307; T += 3) {
+  for (const double T : test::sweep(278.15, 307, 3)) {
     EXPECT_EQ(salt_water_meissner_wentz(2.45e9, T, 0), pure_water_meissner_wentz(2.45e9, T));
     // The correlation of Peyman is not forced through pure water: within 1 % at zero molarity.
     const auto none = sodium_chloride_peyman(2.45e9, T, 0), water = pure_water_kaatze(2.45e9, T);
@@ -75,7 +76,7 @@ TEST(SaltWater, IsPureWaterWithoutSalt) {
 // Dissolved salt lowers eps' and raises eps'' at microwave heating frequencies.
 TEST(SaltWater, LosesMoreWithMoreSalt) {
   double loss = 0, real = 100;
-  for (double M = 0; M <= 1; M += 0.1) {
+  for (const double M : test::sweep(0, 1, 0.1)) {
     const auto e = sodium_chloride_peyman(2.45e9, 298.15, M);
     EXPECT_GT(-e.imag(), loss);
     EXPECT_LT(e.real(), real);

@@ -6,6 +6,7 @@
 #include "planner/base/error.h"
 #include "planner/water/constant_rate.h"
 #include "planner/water/moist_air.h"
+#include "tests/numerics/sweep.h"
 
 namespace lossline::water {
 
@@ -15,7 +16,7 @@ constexpr double P = standard_pressure;
 // The wet bulb that was found gives back the humidity ratio, also for air hotter than boiling.
 TEST(WetBulb, GivesBackTheHumidityRatio) {
   for (const double p : {20e3, 84.5e3, P})
-    for (double T = 250; T < 470; T += 6.1)
+    for (const double T : test::sweep(250, 470, 6.1))
       for (const double rh : {0.01, 0.1, 0.4, 0.9}) {
         if (rh * moist_air_saturation_pressure(T) > 0.9 * p) continue;
         const double W = humidity_ratio_from_relative_humidity(T, rh, p);
@@ -25,7 +26,7 @@ TEST(WetBulb, GivesBackTheHumidityRatio) {
 }
 
 TEST(WetBulb, LiesBetweenDewPointAndDryBulb) {
-  for (double T = 275; T < 470; T += 3.7)
+  for (const double T : test::sweep(275, 470, 3.7))
     for (const double W : {1e-4, 1e-2, 0.3, 2.0}) {
       if (relative_humidity(T, W, P) > 1) continue;
       const double T_wet = wet_bulb(T, W, P);
@@ -36,7 +37,7 @@ TEST(WetBulb, LiesBetweenDewPointAndDryBulb) {
 
 TEST(WetBulb, RisesWithHumidityAndIsTheDryBulbOfSaturatedAir) {
   double before = 0;
-  for (double rh = 0; rh <= 1; rh += 0.02) {
+  for (const double rh : test::sweep(0, 1, 0.02)) {
     const double T_wet = wet_bulb(333.15, humidity_ratio_from_relative_humidity(333.15, rh, P), P);
     EXPECT_GT(T_wet, before);
     before = T_wet;
