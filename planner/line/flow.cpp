@@ -65,11 +65,9 @@ Factor stated_density(const Line& line, const ProductCard& card) {
   const double swelling = 1 + (card.shrinkage ? card.shrinkage->value : 0.0) * X;
   if (line.feed.bulk_density)
     factor.value = *line.feed.bulk_density / (1 + X);
-  else if (bed && card.dry_bulk_density)
-    factor.value = card.dry_bulk_density->value / swelling;
   else if (!bed && card.dry_piece_density)
     factor.value = card.dry_piece_density->value / swelling;
-  else if (!bed && card.dry_bulk_density)
+  else if (card.dry_bulk_density)
     factor.value = card.dry_bulk_density->value / swelling;
   return factor;
 }
