@@ -8,7 +8,7 @@
 //
 // Source: R. E. Collin, Field Theory of Guided Waves, 2nd ed., IEEE Press 1991, chapter 6 (from
 //   memory). Solved by finite volumes with the eigenvalues of a complex symmetric tridiagonal
-//   matrix: no mode can be missed. Second order in the cell, 1e-5 at 400 cells (tests).
+//   matrix: no mode can be missed. Second order in the cell, 2e-5 at 400 cells (tests).
 
 #include <complex>
 #include <span>
