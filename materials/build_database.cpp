@@ -61,7 +61,7 @@ void write_meta(const Database& database, const Sheets& sheets, const std::strin
   std::string all;
   for (const auto& [path, digest] : sheets.inputs) {
     put("input:" + path, digest);
-    all += path + " " + digest + "\n";
+    all.append(path).append(" ").append(digest).append("\n");
   }
   put("inputs_sha256", sha256(all + sha256(schema)));
 }

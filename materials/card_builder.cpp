@@ -112,6 +112,7 @@ const std::optional<Property>* scalar(const ProductCard& card, const std::string
 const std::vector<std::string>& scalar_quantities() {
   static const std::vector<std::string> names = [] {
     std::vector<std::string> out;
+    out.reserve(scalars.size());
     for (const auto& entry : scalars) out.emplace_back(entry.first);
     return out;
   }();

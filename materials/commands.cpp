@@ -3,7 +3,7 @@
 #include <fmt/format.h>
 
 #include <algorithm>
-#include <array>
+#include <map>
 #include <ostream>
 #include <sstream>
 #include <string_view>
@@ -68,9 +68,25 @@ std::string params_text(const DatasetRecord& record) {
   return out;
 }
 
-std::string provenance_text(const Provenance& p) {
+/// The publications of one page, numbered in the order they are first named.
+class SourceList {
+ public:
+  /// "[3]" for a citation.
+  std::string mark(const std::string& source) {
+    const auto at = std::find(sources_.begin(), sources_.end(), source);
+    const auto number = at - sources_.begin() + 1;
+    if (at == sources_.end()) sources_.push_back(source);
+    return fmt::format("[{}]", number);
+  }
+  [[nodiscard]] const std::vector<std::string>& sources() const { return sources_; }
+
+ private:
+  std::vector<std::string> sources_;
+};
+
+std::string provenance_text(const Provenance& p, SourceList& sources) {
   std::string out = fmt::format("grade {}, {}", p.grade, evidence_name(p.evidence));
-  if (!p.source.empty()) out += ": " + p.source;
+  if (!p.source.empty()) out += " " + sources.mark(p.source);
   if (!p.locator.empty()) out += ", " + p.locator;
   return out;
 }
@@ -105,15 +121,16 @@ std::string limit_text(const ProductLimit& limit) {
   return value;
 }
 
-void show_dataset(std::ostream& out, const DatasetRecord& record, bool used) {
+void show_dataset(std::ostream& out, const DatasetRecord& record, bool used, SourceList& sources) {
   std::string head = record.quantity + ": " + record.kind;
   if (!record.form.empty()) head += " " + record.form;
   if (record.kind == "points") head += fmt::format(", {} points", record.points.size());
   if (record.kind == "constant" && !record.points.empty())
     head += " " + record.points.front().printed;
   out << fmt::format("  {} {}  [{}]\n", used ? '*' : ' ', head, record.id);
-  wrapped(out, "      ", provenance_text(record.provenance));
-  if (!record.reprint.empty()) wrapped(out, "      ", "seen in: " + record.reprint);
+  std::string origin = provenance_text(record.provenance, sources);
+  if (!record.reprint.empty()) origin += ", seen in " + sources.mark(record.reprint);
+  wrapped(out, "      ", origin);
   wrapped(out, "      ",
           fmt::format("of the {}; uncertainty {:g} % ({}){}", record.of_phase, record.rel_unc * 100,
                       record.unc_kind, record.origin == "user" ? "; the user's own" : ""));
@@ -130,10 +147,19 @@ void show_dataset(std::ostream& out, const DatasetRecord& record, bool used) {
   if (!record.provenance_note.empty()) wrapped(out, "      ", "note: " + record.provenance_note);
 }
 
-void show_card(std::ostream& out, const ProductCard& card) {
+/// SI unit of every quantity.
+std::map<std::string, std::string> units_of(const Database& database) {
+  std::map<std::string, std::string> units;
+  Statement rows = database.prepare("SELECT quantity_id, si_unit FROM quantity");
+  while (rows.step()) units[rows.text(0)] = rows.text(1) == "1" ? "" : rows.text(1);
+  return units;
+}
+
+void show_card(std::ostream& out, const ProductCard& card,
+               const std::map<std::string, std::string>& units) {
   out << "\nCard\n";
   const auto line = [&](const std::string& name, const std::string& value, const Provenance& p) {
-    out << fmt::format("  {:<26} {:<36} {}  {}\n", name, value, p.grade, evidence_name(p.evidence));
+    out << fmt::format("  {:<27}{:<36} {}  {}\n", name, value, p.grade, evidence_name(p.evidence));
   };
   if (card.permittivity)
     line("permittivity",
@@ -149,7 +175,8 @@ void show_card(std::ostream& out, const ProductCard& card) {
   if (card.cure) line("cure", "kinetics", card.cure_provenance);
   for (const std::string& name : scalar_quantities())
     if (const auto* property = scalar(card, name); property != nullptr && property->has_value())
-      line(name, fmt::format("{:.5g}", (*property)->value), (*property)->provenance);
+      line(name, fmt::format("{:.5g} {}", (*property)->value, units.at(name)),
+           (*property)->provenance);
 }
 
 /// Which data set of each quantity the card uses.
@@ -169,8 +196,10 @@ void show_goldens(std::ostream& out, const std::vector<GoldenResult>& goldens) {
     const std::string value = g.expected_im
                                   ? fmt::format("{:.5g} - j{:.5g}", g.expected, *g.expected_im)
                                   : fmt::format("{:.5g}", g.expected);
-    out << fmt::format("  {} {:<52} {:<22} {}\n", g.passed ? "ok    " : "FAILED", cut(g.state, 52),
-                       value, g.origin == "printed" ? "printed" : "computed");
+    const std::string what = g.dataset.substr(g.dataset.find('.') + 1);
+    out << fmt::format("  {} {:<24} {:<42} {:<17} {}\n", g.passed ? "ok    " : "FAILED",
+                       cut(what, 24), cut(g.state, 42), value,
+                       g.origin == "printed" ? "print" : "comp.");
     if (!g.passed) wrapped(out, "         ", g.failure);
   }
 }
@@ -200,15 +229,21 @@ void show(std::ostream& out, const Store& store, const std::string& id) {
     wrapped(out, "  needs: ", d.needs.empty() ? "eps at the line frequency" : d.needs);
   else if (!d.needs.empty())
     wrapped(out, "  would be better with: ", d.needs);
-  show_card(out, d.card);
+  show_card(out, d.card, units_of(store.base()));
+  SourceList sources;
   if (!d.card.limits.empty()) out << "\nLimits\n";
   for (const ProductLimit& limit : d.card.limits) {
     wrapped(out, "    ", limit_text(limit) + " (" + limit.reason + ")");
-    wrapped(out, "      ", provenance_text(limit.provenance));
+    wrapped(out, "      ", provenance_text(limit.provenance, sources));
   }
   out << "\nData sets (* used by the card)\n";
-  for (const DatasetRecord& record : d.datasets) show_dataset(out, record, is_used(d.card, record));
+  for (const DatasetRecord& record : d.datasets)
+    show_dataset(out, record, is_used(d.card, record), sources);
   show_goldens(out, run_goldens(store.base(), id));
+  if (!sources.sources().empty()) out << "\nSources\n";
+  int number = 0;
+  for (const std::string& source : sources.sources())
+    wrapped(out, fmt::format("  {:>4} ", fmt::format("[{}]", ++number)), source);
 }
 
 bool check(std::ostream& out, const Store& store) {
@@ -230,14 +265,16 @@ bool check(std::ostream& out, const Store& store) {
   sound = sound && failed == 0;
 
   Statement rows = store.base().prepare(
-      "SELECT material_id, evidence, count(*), max(grade) FROM v_unverified"
-      " GROUP BY material_id, evidence ORDER BY material_id, evidence");
-  out << "\nunverified data sets (from memory, from a model, or common practice)\n";
+      "SELECT material_id, sum(evidence = 'from_memory'), sum(evidence = 'model_derived'),"
+      " max(grade), (SELECT count(*) FROM limit_value l JOIN provenance USING(prov_id)"
+      " WHERE l.material_id = v.material_id AND evidence = 'common_practice')"
+      " FROM v_unverified v GROUP BY material_id ORDER BY material_id");
+  out << "\nunverified                from memory  by a model  worst grade  limits by practice\n";
   bool any = false;
   while (rows.step()) {
     any = true;
-    out << fmt::format("  {:<22}{:<18}{:>4}   worst grade {}\n", rows.text(0), rows.text(1),
-                       rows.integer(2), rows.text(3));
+    out << fmt::format("  {:<24}{:>11}{:>12}{:>13}{:>20}\n", rows.text(0), rows.integer(1),
+                       rows.integer(2), rows.text(3), rows.integer(4));
   }
   if (!any) out << "  none\n";
   const auto wrong = store.base().integer(

@@ -10,6 +10,7 @@ namespace {
 template <class Row>
 std::vector<const Row*> sorted_by_id(const std::vector<Row>& rows) {
   std::vector<const Row*> out;
+  out.reserve(rows.size());
   for (const Row& row : rows) out.push_back(&row);
   std::sort(out.begin(), out.end(), [](const Row* a, const Row* b) { return a->id < b->id; });
   return out;

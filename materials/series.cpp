@@ -169,14 +169,16 @@ class Reader {
         wanted = "kg/kg db";
         if (unit == "1" || unit == "kg/kg") unit = head_.wet ? "kg/kg wb" : "kg/kg db";
         if (unit == "%") unit = head_.wet ? "% wb" : "% db";
-        if (name == "X" && unit.ends_with("wb"))
-          problem(line, "X", "X is dry basis but its unit is wet basis", "name the column M");
+        if (unit.ends_with(head_.wet ? "db" : "wb"))
+          problem(line, name,
+                  fmt::format("unit '{}' contradicts the basis of column {}", unit, name),
+                  "X is dry basis; M is what moisture_basis says");
       }
       const auto probe = to_si(0, unit);
       if (!probe || probe->si != wanted)
-        problem(line, name, "unit '" + unit + "' does not fit column '" + name + "'",
-                "a unit of " + wanted + " (degC, K, MHz, GHz, %, kg/kg, mm, cm, 1)");
-      series_.reading += (i ? ", " : "") + name + " [" + unit + "]";
+        problem(line, name, fmt::format("unit '{}' does not fit column '{}'", unit, name),
+                fmt::format("a unit of {} (degC, K, MHz, GHz, %, kg/kg, mm, cm, 1)", wanted));
+      series_.reading += fmt::format("{}{} [{}]", i ? ", " : "", name, unit);
     }
     series_.reading += head_.delimiter == ';' ? "; cells by semicolon" : "; cells by comma";
     if (head_.decimal_comma) series_.reading += ", decimal comma";

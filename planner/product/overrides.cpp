@@ -51,10 +51,12 @@ ProductCard with_overrides(ProductCard card, const ProductOverrides& overrides) 
       {overrides.heat_of_reaction, card.heat_of_reaction}};
   for (const auto& [given, property] : scalars)
     if (given) property = Property{*given, overrides.provenance};
-  // A heat capacity given as one number holds at all temperatures.
+  // One number holds everywhere: a heat capacity at all temperatures, a conductivity and a bulk
+  // density at all moistures.
   if (overrides.dry_heat_capacity && !overrides.dry_heat_capacity_slope)
     card.dry_heat_capacity_slope.reset();
   if (overrides.conductivity && !overrides.conductivity_slope) card.conductivity_slope.reset();
+  if (overrides.dry_bulk_density && !overrides.shrinkage) card.shrinkage.reset();
   try {
     if (overrides.sorption) {
       card.sorption = sorption_of(*overrides.sorption);

@@ -12,21 +12,21 @@ namespace lossline {
 
 /// One line of a permittivity table given in a line file.
 struct PermittivityPoint {
-  double frequency = 0;    ///< [Hz]
-  double moisture = 0;     ///< dry basis [kg/kg]
-  double temperature = 0;  ///< [K]
+  double frequency = 0;      ///< [Hz]
+  double moisture = 0;       ///< dry basis [kg/kg]
+  double temperature = 0;    ///< [K]
   std::complex<double> eps;  ///< eps' - j eps''
 };
 
 /// An isotherm given in a line file: Oswin at a reference temperature with a heat of sorption
 /// that decays with moisture, or none at all.
 struct SorptionOverride {
-  bool free_water = false;      ///< all water behaves as free water
-  double oswin_scale = 0;       ///< A: dry-basis moisture at activity 0.5, 1
-  double oswin_exponent = 0;    ///< B, 1
+  bool free_water = false;                ///< all water behaves as free water
+  double oswin_scale = 0;                 ///< A: dry-basis moisture at activity 0.5, 1
+  double oswin_exponent = 0;              ///< B, 1
   double reference_temperature = 298.15;  ///< [K]
-  double heat_at_zero = 0;      ///< q0, net heat of sorption of the last water [J/kg]
-  double heat_decay_moisture = 1;  ///< Xq, dry basis
+  double heat_at_zero = 0;                ///< q0, net heat of sorption of the last water [J/kg]
+  double heat_decay_moisture = 1;         ///< Xq, dry basis
 };
 
 /// First-order cure stated by the time to 90 % at a temperature, as rheometers report it.
@@ -50,7 +50,10 @@ struct ProductOverrides {
   Provenance permittivity_provenance;
 };
 
-/// The card with the overrides in place.
+/// The card with the overrides in place. A heat capacity, conductivity or dry bulk density given
+/// without its slope or shrinkage holds at all temperatures and moistures: the card's own slope or
+/// shrinkage goes with the value it belonged to. A given permittivity table replaces an estimate
+/// together with its band.
 ///
 ///   throws  Error bad_line_file when a permittivity table cannot be used (see
 ///           permittivity_table.h)

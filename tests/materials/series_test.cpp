@@ -117,6 +117,8 @@ TEST(Series, AsksInsteadOfGuessing) {
   EXPECT_THAT(refusal("X,T,f,epsilon,eps_im\n1,K,Hz,1,1\n"), HasSubstr("unknown column 'epsilon'"));
   EXPECT_THAT(refusal("# decimal=comma\nX,T,f,eps_re,eps_im\n1,K,Hz,1,1\n"),
               HasSubstr("separate the cells by semicolons"));
+  EXPECT_THAT(refusal("# moisture_basis=dry\nM,T,f,eps_re,eps_im\n% wb,K,Hz,1,1\n"),
+              HasSubstr("unit '% wb' contradicts the basis of column M"));
   EXPECT_THAT(refusal(""), HasSubstr("no column names and units found"));
   EXPECT_THAT(refusal("X,T,f,eps_re,eps_im\n"), HasSubstr("no column names and units found"));
 }
