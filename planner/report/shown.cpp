@@ -98,9 +98,16 @@ std::string with_unit(Shown kind, double si, const Setting& setting, int digits)
   return unit.empty() ? number : number + ' ' + unit;
 }
 
+std::string moisture_figures(double dry_basis) {
+  if (!std::isfinite(dry_basis) || std::abs(dry_basis) >= 0.001) return figures(dry_basis);
+  return fmt::format("{:.5f}", dry_basis);
+}
+
 std::string both_bases(double dry_basis) {
-  const double wet = dry_basis / (1 + dry_basis);
-  return fmt::format("{} % wb ({} db)", figures(100 * wet), figures(dry_basis));
+  const double percent = 100 * dry_basis / (1 + dry_basis);
+  return fmt::format("{} % wb ({} db)",
+                     percent < 0.1 ? fmt::format("{:.3f}", percent) : figures(percent),
+                     moisture_figures(dry_basis));
 }
 
 Shown shown_as(verdict::Measure measure) {

@@ -46,6 +46,8 @@ struct Setting {
 [[nodiscard]] std::string figures(double value, int digits = 3);
 /// Value with its unit: "61.2 degC".
 [[nodiscard]] std::string with_unit(Shown kind, double si, const Setting& setting, int digits = 3);
+/// Dry-basis moisture: three figures, five decimals at most.
+[[nodiscard]] std::string moisture_figures(double dry_basis);
 /// Moisture on both bases: "6.3 % wb (0.067 db)".
 [[nodiscard]] std::string both_bases(double dry_basis);
 

@@ -108,7 +108,7 @@ std::string answer(const Page& page, const Setting& set) {
     second += fmt::format("; degree of cure {}", figures(a.degree_of_cure));
   out += wrapped("         ", second, 9);
   std::string third = with_unit(Shown::energy_per_product, a.mains_per_product, set) + " product";
-  if (a.evaporated > 0) {
+  if (verdict::dries(page.solution)) {
     auto figure = [&](double energy) {
       return figures(in_unit(Shown::energy_per_mass, energy, set.units));
     };

@@ -3,6 +3,7 @@
 #include <fmt/format.h>
 
 #include <algorithm>
+#include <map>
 
 #include "planner/report/text_parts.h"
 #include "planner/report/trace.h"
@@ -75,7 +76,7 @@ std::string traces(const Page& page, const Setting& set) {
   }
   std::string out =
       fmt::format("moisture     {}  {} to {} db\n", trace(x, moisture, trace_columns, set.unicode),
-                  figures(moisture.front()), figures(moisture.back()));
+                  moisture_figures(moisture.front()), moisture_figures(moisture.back()));
   out += fmt::format("temperature  {}  {} to {}, highest {} {}\n",
                      trace(x, temperature, trace_columns, set.unicode), T(temperature.front()),
                      T(temperature.back()), T(hottest), unit_name(Shown::temperature, set));
@@ -109,8 +110,11 @@ std::string power_section(const Page& page, const Setting& set) {
   out += fmt::format("  {:<26}{:>9}{:>12}", "mains in all", kilowatts(p.mains),
                      percent(p.mains, p.mains));
   if (p.forward > 0) out += fmt::format("   generator output {} kW", kilowatts(p.forward));
-  if (p.fuel > 0) out += fmt::format("; fuel or steam for air {} kW", kilowatts(p.fuel));
-  return out + '\n';
+  out += '\n';
+  if (p.fuel > 0)
+    out += fmt::format("  {:<26}{:>9}   bought beside the mains\n", "gas or steam for air",
+                       kilowatts(p.fuel));
+  return out;
 }
 
 std::string stretch_section(const Page& page, const Setting& set) {
@@ -127,7 +131,7 @@ std::string stretch_section(const Page& page, const Setting& set) {
                     figures(in_unit(Shown::length, stretch.length, set.units)),
                     speed > 0 ? figures(stretch.length / speed / 60) : "-");
     if (const Station* end = last_station(s, i))
-      row += fmt::format(" {:>8} {:>10.1f}", figures(end->moisture),
+      row += fmt::format(" {:>8} {:>10.1f}", moisture_figures(end->moisture),
                          in_unit(Shown::temperature, end->temperature, set.units));
     if (const CavityReport* c = cavity_of(s, i))
       row += fmt::format(" {:>9} {:>9} {:>7}% {:>8}", kilowatts(c->launched), kilowatts(c->bed),
@@ -144,7 +148,9 @@ std::string cavity_section(const Page& page, const Setting& set) {
   std::string out =
       fmt::format("{:<16} {:>7} {:>12} {:>8} {:>8} {:>8} {:>11} {:>8} {:>10}\n", "Cavity", "MHz",
                   "field, kV/m", "product", "unmixed", "mixed", "uneven", "modes", "hot spots");
-  std::vector<std::string> notes;
+  std::map<std::pair<field::ValidityGrade, field::ValidityKind>, std::vector<const CavityReport*>>
+      notes;
+  bool fed_by_neighbour = false;
   for (const CavityReport& c : s.cavities) {
     out += fmt::format(
         "{} {:>7.5g} {:>5} /{:>5} {:>7}% {:>7}% {:>7}% {:>11} {:>8} {:>10}\n", cut(c.name, 16),
@@ -152,15 +158,21 @@ std::string cavity_section(const Page& page, const Setting& set) {
         percent(c.bed, c.launched), figures(100 * c.share_unmixed), figures(100 * c.share_mixed),
         fmt::format("{} to {} %", figures(100 * c.uneven_low, 2), figures(100 * c.uneven_high, 2)),
         figures(c.modal_overlap, 2), with_unit(Shown::small_length, c.hot_spot_pitch, set));
-    for (const field::ValidityFlag& flag : c.validity) {
-      const std::string note = c.name + ": " + flag.sentence;
-      if (std::find(notes.begin(), notes.end(), note) == notes.end()) notes.push_back(note);
-    }
+    for (const field::ValidityFlag& flag : c.validity) notes[{flag.grade, flag.kind}].push_back(&c);
+    fed_by_neighbour = fed_by_neighbour || c.bed > c.launched;
   }
   out +=
-      "  field above / below the belt; product: share of launched power, and without and with "
+      "  field above / below the belt; product: share of launched power, also without and with "
       "mixing\n";
-  for (const std::string& note : notes) out += wrapped("  ! ", note, 4);
+  if (fed_by_neighbour) out += "  above 100 %: power came over from a neighbour cavity\n";
+  // One caution often holds for all cavities alike: the first one's numbers stand for them.
+  for (const auto& [key, cavities] : notes) {
+    std::string names, sentence;
+    for (const CavityReport* c : cavities) names += (names.empty() ? "" : ", ") + c->name;
+    for (const field::ValidityFlag& flag : cavities.front()->validity)
+      if (flag.kind == key.second && flag.grade == key.first) sentence = flag.sentence;
+    out += wrapped("  ! ", names + ": " + sentence, 4);
+  }
   return out;
 }
 

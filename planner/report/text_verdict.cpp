@@ -34,14 +34,14 @@ const char* sign(Standing standing) {
 
 /// Where, and how many more rows of the same name and standing are not shown.
 std::string place(const Margin& m, std::size_t more, const Setting& set) {
-  if (more > 0) return fmt::format("{} and {} more", m.where, more);
+  if (more > 0) return fmt::format("{} +{}", m.where, more);
   if (!m.x) return m.where;
   return fmt::format("{} {}", m.where, with_unit(Shown::length, *m.x, set, 2));
 }
 
 std::string number(const Margin& m, const std::optional<double>& value, const Setting& set) {
   if (!value) return "-";
-  if (m.measure == verdict::Measure::moisture) return figures(*value) + " db";
+  if (m.measure == verdict::Measure::moisture) return moisture_figures(*value) + " db";
   return with_unit(shown_as(m.measure), *value, set);
 }
 
@@ -50,6 +50,11 @@ std::string room(const Margin& m, const Setting& set) {
   if (m.measure == verdict::Measure::temperature)
     return with_unit(Shown::temperature_step, *m.margin, set);
   return number(m, m.margin, set);
+}
+
+std::string origin_words(std::string origin) {
+  std::replace(origin.begin(), origin.end(), '_', ' ');
+  return origin;
 }
 
 std::string trimmed(std::string text) {
@@ -62,8 +67,8 @@ std::string margin_row(const Margin& m, bool binding, std::size_t more, const Se
       m.limit ? (m.at_least ? ">= " : "<= ") + number(m, m.limit, set) : std::string("-");
   return fmt::format("{} {} {} {:>12} {:>15} {:>11}  {}", sign(m.standing),
                      cut(verdict::standing_word(m.standing), 7),
-                     cut(m.name + (binding ? " <-" : ""), 30), number(m, m.value, set), limit,
-                     room(m, set), trimmed(cut(place(m, more, set), 17))) +
+                     cut(m.name + (binding ? " <-" : ""), 28), number(m, m.value, set), limit,
+                     room(m, set), trimmed(cut(place(m, more, set), 19))) +
          '\n';
 }
 
@@ -71,18 +76,20 @@ std::string margin_row(const Margin& m, bool binding, std::size_t more, const Se
 
 std::string margin_section(const Page& page, const Setting& setting) {
   const std::vector<Margin>& all = page.margins.all;
-  std::string out = fmt::format("{:<9} {:<30} {:>12} {:>15} {:>11}  {}\n", "Margins", "", "value",
+  std::string out = fmt::format("{:<9} {:<28} {:>12} {:>15} {:>11}  {}\n", "Margins", "", "value",
                                 "limit", "room", "where");
   std::size_t shown = 0, left = 0;
   std::set<std::pair<std::string, Standing>> seen;
   for (std::size_t i = 0; i < all.size(); ++i) {
     const Margin& m = all[i];
-    const auto same = [&](const Margin& other) {
-      return other.name == m.name && other.standing == m.standing;
-    };
-    // Many generators fare alike: the one with the least room stands for them.
-    if (!seen.insert({m.name, m.standing}).second) continue;
-    const auto count = static_cast<std::size_t>(std::count_if(all.begin(), all.end(), same));
+    std::size_t count = 1;
+    if (m.origin == "plan" || m.origin == "generator") {
+      // Many generators fare alike: the one with the least room stands for them.
+      if (!seen.insert({m.name, m.standing}).second) continue;
+      count = static_cast<std::size_t>(std::count_if(all.begin(), all.end(), [&](const Margin& o) {
+        return o.name == m.name && o.standing == m.standing;
+      }));
+    }
     if (m.standing == Standing::within && shown >= rows_wanted) {
       left += count;
       continue;
@@ -129,10 +136,10 @@ std::string caution_section(const Page& page) {
 std::string evidence_section(const Page& page) {
   const verdict::EvidenceSummary e = verdict::evidence_summary(page.solution);
   std::string words = e.sentence;
-  if (!e.unverified.empty()) {
-    words += ": ";
-    for (std::size_t i = 0; i < e.unverified.size(); ++i)
-      words += (i > 0 ? ", " : "") + e.unverified[i];
+  for (const auto& [origin, quantities] : e.unverified) {
+    std::string list;
+    for (const std::string& quantity : quantities) list += (list.empty() ? "" : ", ") + quantity;
+    words += fmt::format("; {}: {}", origin_words(origin), list);
   }
   return wrapped("Evidence ", words, 9);
 }

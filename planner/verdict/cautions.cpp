@@ -53,7 +53,7 @@ void add_plant(const CautionCase& c, std::vector<Caution>& out) {
     if (air.fog)
       out.push_back({"C14", "Condensation", "air is saturated somewhere in this loop", air.name,
                      deciding("common practice"), false});
-  if (c.line.surfaces.empty() && s.answer.evaporated > 0)
+  if (c.line.surfaces.empty() && dries(s))
     out.push_back({"C14", "Condensation",
                    "no cold surface is named, so the distance to the dew point is unknown: name "
                    "the coldest wall, duct and stack",
@@ -82,19 +82,20 @@ void add_radio(const CautionCase& c, std::vector<Caution>& out) {
   for (const Generator& g : c.line.generators) {
     if (std::find(seen.begin(), seen.end(), g.frequency) != seen.end()) continue;
     seen.push_back(g.frequency);
+    const std::string where = fmt::format("{:.5g} MHz", 1e-6 * g.frequency);
     const BandAnswer band = radio_band(g.frequency, c.line.duty.country);
     if (band.status != BandStatus::listed)
       out.push_back({"C04", "Radio licence",
                      band.text + ": ask the radio authority before ordering and keep its answer",
-                     g.name, deciding(band.document), false});
+                     where, deciding(band.document), false});
     const bool wireless = g.frequency >= 2400e6 && g.frequency <= 2500e6;
     const bool mobile = g.frequency >= 890e6 && g.frequency <= 930e6;
     if (wireless || mobile)
       out.push_back({"C26", "Interference with the plant",
-                     fmt::format("{} works beside {}: plan the spectrum, filter weigh cells; a "
+                     fmt::format("{} lies beside {}: plan the spectrum, filter weigh cells; a "
                                  "thermocouple in the field reads wrong",
-                                 g.name, wireless ? "Wi-Fi at 2.4 GHz" : "mobile service"),
-                     g.name, deciding("CISPR 11, group 2"), false});
+                                 where, wireless ? "Wi-Fi at 2.4 GHz" : "mobile service"),
+                     where, deciding("CISPR 11, group 2"), false});
   }
 }
 

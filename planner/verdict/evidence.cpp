@@ -3,6 +3,7 @@
 #include <fmt/format.h>
 
 #include <algorithm>
+#include <set>
 #include <utility>
 
 namespace lossline::verdict {
@@ -23,15 +24,18 @@ bool is_verified(const EvidenceItem& item) {
 
 EvidenceSummary evidence_summary(const Solution& solution) {
   EvidenceSummary out;
+  std::set<std::pair<std::string, std::string>> seen;  // one default may serve several stretches
   for (const EvidenceItem& item : solution.evidence) {
+    if (!seen.insert({item.quantity, item.provenance.source}).second) continue;
     const int grade = std::clamp(item.provenance.grade - 'A', 0, 4);
     ++out.by_grade[static_cast<std::size_t>(grade)];
     if (!is_verified(item))
-      out.unverified.push_back(item.quantity + " (" + evidence_name(item.provenance.evidence) +
-                               ")");
+      out.unverified[evidence_name(item.provenance.evidence)].push_back(item.quantity);
   }
-  out.contains_unverified = !out.unverified.empty();
-  if (solution.evidence.empty()) {
+  std::size_t unverified = 0;
+  for (const auto& [origin, quantities] : out.unverified) unverified += quantities.size();
+  out.contains_unverified = unverified > 0;
+  if (seen.empty()) {
     out.sentence = "no material data used";
     return out;
   }
@@ -40,10 +44,9 @@ EvidenceSummary evidence_summary(const Solution& solution) {
     if (out.by_grade[g] > 0)
       grades += fmt::format("{}{} {}", grades.empty() ? "" : ", ", out.by_grade[g],
                             static_cast<char>('A' + static_cast<int>(g)));
-  out.sentence = fmt::format("{} quantities by grade: {}", solution.evidence.size(), grades);
+  out.sentence = fmt::format("{} quantities by grade: {}", seen.size(), grades);
   if (out.contains_unverified)
-    out.sentence += fmt::format("; contains unverified data ({} of {})", out.unverified.size(),
-                                solution.evidence.size());
+    out.sentence += fmt::format("; contains unverified data ({} of {})", unverified, seen.size());
   return out;
 }
 

@@ -3,6 +3,7 @@
 // has verified, and the stamps every page of the result must carry.
 
 #include <array>
+#include <map>
 #include <string>
 #include <vector>
 
@@ -13,8 +14,9 @@ namespace lossline::verdict {
 
 /// Summary of the evidence of one solution.
 struct EvidenceSummary {
-  std::array<int, 5> by_grade{};        ///< how many quantities of grade A, B, C, D, E
-  std::vector<std::string> unverified;  ///< "conductivity (user_estimate)"
+  std::array<int, 5> by_grade{};  ///< how many quantities of grade A, B, C, D, E
+  /// Quantities nobody has verified, by how they came: "invented" -> "permittivity", ...
+  std::map<std::string, std::vector<std::string>> unverified;
   bool contains_unverified = false;
   std::string sentence;  ///< "8 quantities: 2 B, 3 C, 3 E; contains unverified data (5 of 8)"
 };

@@ -53,6 +53,10 @@ const char* measure_unit(Measure measure) {
   return "1";
 }
 
+bool dries(const Solution& solution) {
+  return solution.answer.evaporated > 0.01 * solution.answer.product_rate;
+}
+
 double Margin::relative() const {
   if (!margin) return std::numeric_limits<double>::infinity();
   return *margin / std::max(reserve, 1e-300);

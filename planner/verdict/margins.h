@@ -79,6 +79,10 @@ inline constexpr double relative_reserve = 0.10;    ///< of the limit
 /// 20 degC carries 2453.5 kJ/kg over liquid at 20 degC, at 100 degC 2591.7 (IAPWS-IF97).
 inline constexpr double cool_evaporation_share = 0.946;
 
+/// Whether enough water leaves for energy per water and condensation to mean something: more than
+/// a hundredth of the product. Own choice.
+[[nodiscard]] bool dries(const Solution& solution);
+
 /// Reads every limit off a solution.
 ///
 ///   line, card  as solved, overrides applied

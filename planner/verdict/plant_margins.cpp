@@ -91,7 +91,7 @@ double credited_heat(const Solution& s) {
 
 void add_energy_floor(const Case& c, std::vector<Margin>& out) {
   const Answer& answer = c.solution.answer;
-  if (!(answer.evaporated > 0) || !(answer.energy_floor > 0)) return;
+  if (!dries(c.solution) || !(answer.energy_floor > 0)) return;
   const PowerLedger& power = c.solution.power;
   Margin m;
   m.name = "energy per water";

@@ -20,11 +20,13 @@ constexpr double near_boiling = 5;
 std::string unstable_dry_end(const CautionCase& c) {
   const std::vector<Station>& p = c.solution.profile;
   constexpr double rise = 1.02, fall = 0.98;
+  constexpr double heat_of_evaporation = 2.3e6, counts = 0.05;  // of the heat, to matter at all
   for (std::size_t i = 0; i + 2 < p.size(); ++i) {
     const Station &a = p[i], &b = p[i + 1], &d = p[i + 2];
     if (a.stretch != d.stretch || a.stretch >= c.line.stretches.size()) continue;
     if (c.line.stretches[a.stretch].kind != StretchKind::microwave) continue;
-    if (!(a.heating_rate > 0) || !(d.evaporation > 0)) continue;
+    if (!(a.heating_rate > 0)) continue;
+    if (!(a.evaporation * heat_of_evaporation > counts * a.product_power)) continue;
     if (b.heating_rate > rise * a.heating_rate && d.heating_rate > rise * b.heating_rate &&
         b.evaporation < fall * a.evaporation && d.evaporation < fall * b.evaporation)
       return c.line.stretches[a.stretch].name;
@@ -41,7 +43,7 @@ void add_state_cautions(const CautionCase& c, std::vector<Caution>& out) {
                    where, deciding("trial"), false});
   const double boiling_margin =
       water::saturation_line::temperature(c.line.pressure) - answer.hottest_temperature;
-  if (answer.evaporated > 0 &&
+  if (dries(c.solution) &&
       (boiling_margin < near_boiling || answer.highest_overpressure > worth_a_burst_caution))
     out.push_back({"C15", "Pressure inside the product",
                    fmt::format("up to {:.2g} kPa over the tunnel at {:.1f} m{}: ramp slowly; tight "

@@ -46,7 +46,7 @@ double wet_mass_per_length(const Case& c, const Station& s) {
 void add_peak(const Case& c, const Rule& rule, double limit, const Range& range,
               const std::string& origin, const std::string& reason, std::vector<Margin>& out) {
   Margin m;
-  m.name = rule.name;
+  m.name = origin == "card" ? std::string(rule.name) + ", card" : rule.name;
   m.origin = origin;
   m.reason = reason;
   m.measure = rule.measure;
@@ -73,7 +73,7 @@ const Rule overpressure{"overpressure inside", Measure::pressure,
 void add_field(const Case& c, double limit, const std::string& origin, const std::string& reason,
                std::vector<Margin>& out) {
   Margin m;
-  m.name = "field in cavity, mean rms";
+  m.name = origin == "card" ? "field in cavity, card" : "field in cavity, mean rms";
   m.origin = origin;
   m.reason = reason;
   m.measure = Measure::field;
@@ -139,7 +139,7 @@ void add_card_limits(const Case& c, std::vector<Margin>& out) {
         break;
       case LimitKind::final_moisture_low: {
         Margin m;
-        m.name = "final moisture, driest";
+        m.name = "final moisture, card";
         m.origin = "card";
         m.reason = limit.reason;
         m.measure = Measure::moisture;

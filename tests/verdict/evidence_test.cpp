@@ -15,8 +15,15 @@ using ::testing::HasSubstr;
 TEST(Evidence, CountsGradesAndListsWhatNobodyVerified) {
   const EvidenceSummary e = evidence_summary(sample::solved());
   EXPECT_THAT(e.by_grade, ElementsAre(0, 1, 0, 0, 1));
-  EXPECT_THAT(e.unverified, ElementsAre("conductivity (user_estimate)"));
+  ASSERT_EQ(e.unverified.size(), 1u);
+  EXPECT_THAT(e.unverified.at("user_estimate"), ElementsAre("conductivity"));
   EXPECT_EQ(e.sentence, "2 quantities by grade: 1 B, 1 E; contains unverified data (1 of 2)");
+}
+
+TEST(Evidence, CountsADefaultOnceHoweverManyStretchesUseIt) {
+  Solution s = sample::solved();
+  s.evidence.push_back(s.evidence.back());
+  EXPECT_EQ(evidence_summary(s).sentence, evidence_summary(sample::solved()).sentence);
 }
 
 TEST(Evidence, AMarkMakesAValueUnverifiedWhateverItsSource) {

@@ -64,13 +64,14 @@ TEST(Margins, ReadTheCardsLimitsWithTheirMoistureRange) {
                    Severity::quality,
                    {}};
   card.limits = {wet};
-  const Margin m = find(of(sample::solved_line(), sample::solved(), card), "product temperature");
+  const Margin m =
+      find(of(sample::solved_line(), sample::solved(), card), "product temperature, card");
   EXPECT_DOUBLE_EQ(m.value.value(), 320);  // hottest while wetter than 0.25
   EXPECT_EQ(m.origin, "card");
   EXPECT_EQ(m.reason, "gelatinises");
   card.limits[0].moisture_from = 0.5;  // never that wet
   for (const Margin& all : of(sample::solved_line(), sample::solved(), card).all)
-    EXPECT_NE(all.name, "product temperature");
+    EXPECT_NE(all.name, "product temperature, card");
 }
 
 TEST(Margins, JudgeTheTargetMoistureOnTheNearerSide) {
