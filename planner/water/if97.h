@@ -5,8 +5,10 @@
 //
 // Source [IF97]: IAPWS R7-97(2012), Revised Release on the IAPWS Industrial Formulation 1997 for
 //   the Thermodynamic Properties of Water and Steam: equations 7 and 15-17 with Tables 2, 10, 11;
-//   section 8 with Table 34. The coefficients are proved by the release's own check values (Tables
-//   5, 15, 35, 36), which tests/published reproduces to the printed digits.
+//   section 8 with Table 34. The coefficients were taken from a copy of the tables (the
+//   data of the python package iapws 1.5), not from the release itself, and are proved by the
+//   release's own check values (Tables 5, 15, 35, 36), which tests/published reproduces to the
+//   printed digits.
 //
 // Every function is pure, safe from any thread, and throws Error out_of_range outside the range it
 // states and for NaN.

@@ -13,8 +13,8 @@ namespace lossline::numerics {
 
 constexpr double nan = std::numeric_limits<double>::quiet_NaN();
 
-// Fritsch & Carlson 1980, the radiochemical data "RPN 14" (their Figure 1): steep rise, long
-// plateau, on which an ordinary spline overshoots.
+// Fritsch & Carlson 1980, the radiochemical data "RPN 14" (from memory) (their Figure 1): steep
+// rise, long plateau, on which an ordinary spline overshoots.
 const std::vector<double> rpn_x{7.99, 8.09, 8.19, 8.7, 9.2, 10, 12, 15, 20};
 const std::vector<double> rpn_y{0,        2.76429e-5, 4.37498e-2, 0.169183, 0.469428,
                                 0.943740, 0.998636,   0.999919,   0.999994};
