@@ -30,7 +30,7 @@ struct TunnelModes {
 ///   cells      20 .. 2000
 ///   throws     Error out_of_range
 ///
-/// Cost: proportional to cells squared, 20 ms at 400.
+/// Cost: proportional to cells squared, 50 ms at 400.
 TunnelModes tunnel_modes(double frequency, std::span<const Layer> layers, int cells = 400);
 
 /// Attenuation along a tunnel of infinite width of the wave with this kt^2 [dB/m].
