@@ -14,8 +14,8 @@
 //          equations 6-8 and Table III: two relaxations. Never extrapolate it above 40 degC: eps''
 //          at 2.45 GHz is 75 % high at 95 degC.
 //   [P527] Recommendation ITU-R P.527-4 (06/2017): two relaxations.
-// The papers state measurements from about 1 GHz up; below that every form tends to its static
-// value, and the lower limit here is model_frequency_min for all.
+// [K89] states 1.1 GHz and [MW04] 1 GHz as the lowest frequency; below that every form tends to its
+// static value, and the lower limit here is model_frequency_min for all.
 //
 // Every function is pure, safe from any thread, takes a microsecond or less, and throws Error
 // out_of_range outside its range and for NaN.

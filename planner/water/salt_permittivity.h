@@ -4,12 +4,10 @@
 //
 // Sources (coefficients read in agreeing copies, not in the papers themselves)
 //   [MW04] T. Meissner, F. J. Wentz, IEEE Trans. Geosci. Remote Sens. 42, 1836-1849, 2004: sea
-//   salt,
-//          equations 11-17 and Tables III, VI; conductivity in the form of Stogryn.
-//   [P07]  A. Peyman, C. Gabriel, E. H. Grant, "Complex permittivity of sodium chloride solutions
-//   at
-//          microwave frequencies", Bioelectromagnetics 28, 264-274, 2007 (title and pages from
-//          memory), on top of the pure water of Kaatze 1989 (see permittivity.h).
+//          salt; conductivity in the form of Stogryn.
+//   [P07]  A. Peyman, C. Gabriel, E. H. Grant, "Complex permittivity of sodium chloride
+//          solutions at microwave frequencies", Bioelectromagnetics 28, 264-274, 2007 (title and
+//          pages from memory), on top of the pure water of Kaatze 1989 (see permittivity.h).
 //   [M]    from memory: conductivity of salt solutions rises by 2 % of its value at 25 degC per K.
 //
 // Every function is pure, safe from any thread, and throws Error out_of_range outside its range and

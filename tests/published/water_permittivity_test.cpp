@@ -64,8 +64,8 @@ TEST(PureWater, MatchesTheCheckTableOfFourModels) {
 
 // ITU-R P.527 / Meissner-Wentz / Kaatze at heating frequencies, three printed decimals; between
 // them the spread of published models: 1.5 % at 20 degC, 2 % at 0 degC, 3 % at 40 degC, 13 % of
-// eps'' at 60 degC, where only Kaatze is still inside its range. Ellison, fitted to more and newer
-// data, has up to 2.5 % more eps'' in cold water; against Kaatze at 60 degC 1 %.
+// eps'' at 60 degC, where only Kaatze is still inside its range. Ellison has up to
+// 2.5 % more eps'' in cold water and is within 1 % of Kaatze at 60 degC.
 TEST(PureWater, MatchesThePublishedModelsAtHeatingFrequencies) {
   struct Point {
     double GHz, celsius, re[3], loss[3], spread_re, spread_loss, ellison;
