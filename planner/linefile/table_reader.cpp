@@ -53,7 +53,9 @@ std::string TableReader::path_of(const std::string& key) const {
 }
 
 std::string TableReader::name() const {
-  return path_.empty() ? "a line file" : '[' + path_ + ']';
+  if (path_.empty()) return "a line file";
+  const std::size_t number = path_.ends_with(']') ? path_.rfind('[') : std::string::npos;
+  return number == std::string::npos ? '[' + path_ + ']' : "[[" + path_.substr(0, number) + "]]";
 }
 
 bool TableReader::report(const Place& place, const std::string& key, std::string wrong,
@@ -109,11 +111,9 @@ bool TableReader::read(const std::string& key, const Node& node, double& value,
     if (range.kind.form == QuantityForm::count && !read_text(key, node, written, read, range))
       return false;
   } else {
-    return report(
-        node.place, key, description(node),
-        plain(range.kind)
-            ? fmt::format("write {} without quotes, as in {}", range.kind.noun, range.kind.example)
-            : fmt::format("write {} in quotes, as in \"{}\"", range.kind.noun, range.kind.example));
+    return report(node.place, key, description(node),
+                  fmt::format("write {} {} quotes, as in {}", range.kind.noun,
+                              plain(range.kind) ? "without" : "in", as_in_file(range.kind)));
   }
   if (!range.holds(read))
     return report(node.place, key,
