@@ -56,7 +56,7 @@ template <class S>
 S overpressure(const S& p, double P) {
   const double d = overpressure_width * P;
   const S over = p - P;
-  if (numerics::plain(over) <= -d) return 0.0 * over;
+  if (numerics::plain(over) <= -d) return S(0.0);
   if (numerics::plain(over) >= d) return over;
   const S q = over + d;
   return q * q / (4 * d);
