@@ -3,6 +3,7 @@
 #include <fmt/format.h>
 
 #include <algorithm>
+#include <optional>
 
 #include "planner/base/constants.h"
 #include "planner/field/openings.h"
@@ -71,36 +72,51 @@ void add_openings(const CautionCase& c, std::vector<Caution>& out) {
            fmt::format(
                "{:.0f} mm is wider than half a wavelength ({:.0f} mm at 2450 MHz, {:.0f} mm "
                "at 915 MHz), so a low height holds nothing back: the reflective and "
-               "absorbing sections must, guaranteed with product in place by {}",
+               "absorbing sections must, with product in place; guaranteed by: {}",
                1000 * widest, 1000 * half_wavelength(2450e6), 1000 * half_wavelength(915e6),
                t.guaranteed_by.empty() ? "nobody yet" : t.guaranteed_by),
            t.name, deciding("IEC 60519-6"), false});
   }
 }
 
-/// Seconds from the present state to the lowest temperature limit with belt and evaporation
-/// stopped and power on; the shortest along the belt.
-std::string halt_text(const CautionCase& c) {
-  double limit = c.line.limits.product_temperature.value_or(1e9);
-  for (const ProductLimit& l : c.card.limits)
-    if (l.kind == LimitKind::product_temperature || l.kind == LimitKind::runaway_temperature)
-      limit = std::min(limit, l.value);
-  const ProductFlow& flow = c.solution.answer.flow;
-  if (!(limit < 1e9) || !c.card.dry_heat_capacity || !(flow.speed > 0))
-    return "how long the product bears the power is unknown";
-  double shortest = -1;
-  for (const Station& s : c.solution.profile) {
-    const double capacity =
-        flow.dry_solids / flow.speed * (c.card.dry_heat_capacity->value + 4186.0 * s.moisture);
-    if (!(s.product_power > 0) || !(capacity > 0)) continue;
-    const double seconds = std::max(limit - s.temperature, 0.0) * capacity / s.product_power;
-    if (shortest < 0 || seconds < shortest) shortest = seconds;
+/// Lowest temperature limit that holds at a moisture [K]; none when no limit is known.
+std::optional<double> temperature_limit(const CautionCase& c, double moisture) {
+  std::optional<double> limit = c.line.limits.product_temperature;
+  for (const ProductLimit& l : c.card.limits) {
+    if (l.kind != LimitKind::product_temperature && l.kind != LimitKind::runaway_temperature)
+      continue;
+    if ((l.moisture_from && moisture < *l.moisture_from) ||
+        (l.moisture_to && moisture > *l.moisture_to))
+      continue;
+    if (!limit || l.value < *limit) limit = l.value;
   }
-  if (shortest < 0) return "how long the product bears the power is unknown";
+  return limit;
+}
+
+/// How long the product bears a stopped belt: shortest time along the belt from its state to the
+/// limit there, power on, no evaporation.
+std::string halt_text(const CautionCase& c) {
+  const std::string unknown = "how long the product bears the power is unknown";
+  const ProductFlow& flow = c.solution.answer.flow;
+  if (!c.card.dry_heat_capacity || !(flow.speed > 0)) return unknown;
+  std::optional<double> shortest;
+  double limit = 0;
+  for (const Station& s : c.solution.profile) {
+    const std::optional<double> here = temperature_limit(c, s.moisture);
+    if (!here || !(s.product_power > 0)) continue;
+    const double capacity =
+        flow.dry_solids / flow.speed * (c.card.dry_heat_capacity->value + 4190.0 * s.moisture);
+    const double seconds = (*here - s.temperature) * capacity / s.product_power;
+    if (shortest && seconds >= *shortest) continue;
+    shortest = seconds;
+    limit = *here;
+  }
+  if (!shortest) return unknown;
+  if (*shortest <= 0) return "the product is beyond a temperature limit even while it moves";
   return fmt::format(
       "with power on and no evaporation the product's mean reaches {:.0f} degC in "
       "about {:.0f} s, hot spots sooner",
-      limit - celsius_zero, shortest);
+      limit - celsius_zero, *shortest);
 }
 
 void add_power_cautions(const CautionCase& c, std::vector<Caution>& out) {
