@@ -21,16 +21,16 @@ struct Flags {
 };
 
 namespace flag {
-inline constexpr Flags edge{1u << 0};          ///< within 2 % of the span of a range end
-inline constexpr Flags extrapolated{1u << 1};  ///< outside the range, within its allowance
-inline constexpr Flags clamped{1u << 2};       ///< outside the range, held at its end
-inline constexpr Flags estimated{1u << 3};     ///< from composition by a general mixing model
-inline constexpr Flags from_memory{1u << 4};   ///< the source is named but was not seen
+inline constexpr Flags edge{1u << 0};           ///< within 2 % of the span of a range end
+inline constexpr Flags extrapolated{1u << 1};   ///< outside the range, within its allowance
+inline constexpr Flags clamped{1u << 2};        ///< outside the range, held at its end
+inline constexpr Flags estimated{1u << 3};      ///< from composition by a general mixing model
+inline constexpr Flags from_memory{1u << 4};    ///< the source is named but was not seen
 inline constexpr Flags mixed_sources{1u << 5};  ///< joined from more than one publication
 inline constexpr Flags default_uncertainty{1u << 6};  ///< the source states no uncertainty
-inline constexpr Flags invented{1u << 7};      ///< demonstration value, describes nothing real
-inline constexpr Flags assumed{1u << 8};       ///< put in by the user or by a stated default
-inline constexpr Flags guarded{1u << 9};       ///< a physical bound (eps' >= 1, eps'' >= 0) acted
+inline constexpr Flags invented{1u << 7};  ///< demonstration value, describes nothing real
+inline constexpr Flags assumed{1u << 8};   ///< put in by the user or by a stated default
+inline constexpr Flags guarded{1u << 9};   ///< a physical bound (eps' >= 1, eps'' >= 0) acted
 }  // namespace flag
 
 /// A value with its marks.

@@ -24,10 +24,10 @@ enum class Evidence {
 /// Evidence, grade and place of one value or data set.
 struct Provenance {
   Evidence evidence = Evidence::user_estimate;
-  char grade = 'E';         ///< 'A' (best) to 'E'
-  std::string source;       ///< citation in one line; "the user's line file" for overrides
-  std::string locator;      ///< table, equation or page
-  std::string dataset;      ///< data set id in the materials database; empty for overrides
+  char grade = 'E';     ///< 'A' (best) to 'E'
+  std::string source;   ///< citation in one line; "the user's line file" for overrides
+  std::string locator;  ///< table, equation or page
+  std::string dataset;  ///< data set id in the materials database; empty for overrides
   double relative_uncertainty = 0.55;  ///< standard uncertainty over value, 1
 
   /// The marks every value of this origin carries.
