@@ -139,6 +139,7 @@ using namespace flow_parts;
 ProductFlow resolve_sheet(const Line& line, const ProductCard& card,
                           std::vector<FlowProblem>& problems) {
   Factor rate = stated_rate(line, problems);
+  if (!problems.empty()) return {};
   Factor density = stated_density(line, card);
   Factor width{"feed.width", line.feed.width, millimetres, "mm"};
   Factor depth{"feed.depth", line.feed.depth, millimetres, "mm"};
@@ -160,6 +161,7 @@ ProductFlow resolve_profile(const Line& line, const ProductCard& card,
                             std::vector<FlowProblem>& problems) {
   const double dry_share = 1 / (1 + line.duty.feed_moisture);
   Factor rate = stated_rate(line, problems);
+  if (!problems.empty()) return {};
   Factor linear{"feed.mass_per_length", std::nullopt, 1 / dry_share, "kg/m"};
   if (line.feed.mass_per_length) linear.value = *line.feed.mass_per_length * dry_share;
   Factor speed{"belt.speed", line.belt.speed, per_minute, "m/min"};

@@ -69,6 +69,7 @@ ProductFlow resolve_pieces(const Line& line, const ProductCard& card,
   // A mass stated for a piece counts before a density from the database.
   if (mass.value && !line.feed.bulk_density) density.value.reset();
   Factor rate = stated_rate(line, problems);
+  if (!problems.empty()) return flow;
   Factor pieces{"feed.piece_rate", line.feed.piece_rate, 3600, "1/h"};
   if (!close(mass, {&density}, volume, problems)) return flow;
   if (!close(rate, {&pieces, &mass}, 1, problems)) return flow;

@@ -126,9 +126,9 @@ void check_supply(const Line& line, Topology& out) {
       if (!(taken[supplier] <= given * (1 + 1e-9)))
         out.problems.push_back(
             {key("air", l, "takes_from"),
-             fmt::format("takes the exhaust of '{}' to {:.4g} kg/s in all, but only {:.4g} kg/s "
+             fmt::format("takes the exhaust of '{}' to {:.4g} kg/h in all, but only {:.4g} kg/h "
                          "leave it",
-                         loop.takes_from, taken[supplier], given),
+                         loop.takes_from, 3600 * taken[supplier], 3600 * given),
              "lower dry_air_flow here, or let part of the fresh air come from the room"});
     }
   }

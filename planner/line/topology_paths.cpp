@@ -39,11 +39,12 @@ std::string path_text(const Parts& parts, const std::vector<Vertex>& previous, V
 }
 
 void check_end(const Parts& parts, const std::vector<Vertex>& previous, Vertex room,
-               const char* key, Topology& out) {
+               const std::optional<EndTrap>& trap, const char* key, Topology& out) {
   if (previous[room] == room) return;
   const std::string path = path_text(parts, previous, room);
   out.open_paths.push_back(path);
-  out.problems.push_back({key, "the field can leave: " + path + " crosses no end trap",
+  const std::string crosses = trap ? "crosses a trap of 0 dB only" : "crosses no end trap";
+  out.problems.push_back({key, "the field can leave: " + path + ' ' + crosses,
                           "put an end trap with its reflective and absorbing attenuation there"});
 }
 
@@ -75,8 +76,8 @@ void read_paths(const Line& line, const Parts& parts, Topology& out) {
   }
   if (powered.empty()) return;
   const std::vector<Vertex> previous = open_predecessors(parts, powered);
-  check_end(parts, previous, parts.room_inlet, "endtrap.inlet", out);
-  check_end(parts, previous, parts.room_outlet, "endtrap.outlet", out);
+  check_end(parts, previous, parts.room_inlet, line.inlet_trap, "endtrap.inlet", out);
+  check_end(parts, previous, parts.room_outlet, line.outlet_trap, "endtrap.outlet", out);
 }
 
 }  // namespace lossline::part_graph

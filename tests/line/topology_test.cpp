@@ -106,7 +106,7 @@ TEST(Topology, RefusesMoreAirThanTheSupplierLetsGo) {
   line.stretches[0].air = "pre";
   line.air = {sample::loop("pre", AirPattern::co), sample::loop("main", AirPattern::co, 0.5)};
   line.air[0].takes_from = "main";  // wants 1.5 kg/s, gets 0.75
-  EXPECT_THAT(only(topology(line)).wrong, HasSubstr("0.75 kg/s"));
+  EXPECT_THAT(only(topology(line)).wrong, HasSubstr("2700 kg/h"));
   line.air[0].dry_air_flow = 0.75;
   EXPECT_THAT(topology(line).problems, IsEmpty());
 }
