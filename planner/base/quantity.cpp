@@ -31,7 +31,8 @@ struct Reading {
   std::size_t unit_begin = 0;
   std::string_view unit;
 
-  [[nodiscard]] QuantityResult fault(std::string wrong, std::string right, std::size_t byte) const {
+  [[nodiscard]] QuantityResult fault(const std::string& wrong, std::string right,
+                                     std::size_t byte) const {
     return {std::nullopt, {quoted(text) + wrong, std::move(right), column_of(text, byte)}};
   }
   [[nodiscard]] std::string as_in() const {

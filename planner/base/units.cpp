@@ -246,6 +246,7 @@ std::variant<Unit, UnitFault> read_unit(std::string_view text) {
 
 std::vector<std::string> known_symbols() {
   std::vector<std::string> names;
+  names.reserve(symbols.size() * prefixes.size());
   for (const Symbol& s : symbols) names.emplace_back(s.name);
   for (const Prefix& p : prefixes)
     for (const Symbol& s : symbols)

@@ -10,6 +10,7 @@ namespace {
 template <class T>
 std::vector<std::string> names_of(const std::vector<T>& parts) {
   std::vector<std::string> names;
+  names.reserve(parts.size());
   for (const T& part : parts) names.push_back(part.name);
   return names;
 }

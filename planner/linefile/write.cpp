@@ -85,6 +85,7 @@ class TableWriter final : public Fields {
   }
   bool shares(const char* key, std::vector<double>& values) override {
     std::vector<std::string> written;
+    written.reserve(values.size());
     for (const double value : values) written.push_back(exact_quantity(value, quantity::share));
     return texts(key, written, Need::optional);
   }
