@@ -74,6 +74,8 @@ struct Margins {
 
 inline constexpr double temperature_reserve = 5.0;  ///< [K]
 inline constexpr double relative_reserve = 0.10;    ///< of the limit
+/// Best share of mains that becomes microwave power, upper end at 915 MHz; common practice.
+inline constexpr double best_mains_to_microwave = 0.86;
 
 /// Evaporation into air below boiling takes up to this share less than at boiling: the vapour at
 /// 20 degC carries 2453.5 kJ/kg over liquid at 20 degC, at 100 degC 2591.7 (IAPWS-IF97).

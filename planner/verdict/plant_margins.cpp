@@ -101,6 +101,8 @@ void add_energy_floor(const Case& c, std::vector<Margin>& out) {
   m.at_least = true;
   m.where = "whole line";
   m.limit = cool_evaporation_share * answer.energy_floor;
+  // Common practice: mains to microwave is 0.70 to 0.86 at best; better than that is suspicious.
+  m.reserve = answer.energy_floor / best_mains_to_microwave - *m.limit;
   m.value = (power.mains + power.fuel + credited_heat(c.solution)) / answer.evaporated;
   out.push_back(judged(std::move(m)));
 }
