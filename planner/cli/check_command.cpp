@@ -29,10 +29,10 @@ int check_command(const Options& options, const std::string& program, std::ostre
       with_unit(Shown::length, f.width, set), with_unit(Shown::areal_mass, f.dry_areal_mass, set),
       with_unit(Shown::speed, f.speed, set));
   out << (f.coverage < 1 ? fmt::format(", {} % covered\n", figures(100 * f.coverage)) : "\n");
-  out << fmt::format("  {} stretches, {} in all and {} in cavities, {} min; {} generators\n",
+  out << fmt::format("  {} stretches, {} in all and {} in cavities, {} min; {} generator{}\n",
                      input.line.stretches.size(), with_unit(Shown::length, length, set),
                      with_unit(Shown::length, heated, set), figures(length / f.speed / 60),
-                     input.line.generators.size());
+                     input.line.generators.size(), input.line.generators.size() == 1 ? "" : "s");
   return exit_ok;
 }
 

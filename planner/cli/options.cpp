@@ -46,13 +46,23 @@ bool mistyped(const CLI::App& app, const std::string& word) {
 struct Parser {
   CLI::App app{summary, "lossline"};
   Options options;
+  std::string format = "text", units = "si";
   std::map<const CLI::App*, Command> commands;
 
   Parser();
   CLI::App* add(CLI::App& parent, const char* name, const char* what, Command command) {
     CLI::App* sub = parent.add_subcommand(name, what);
     commands[sub] = command;
+    sub->footer("");
     return sub;
+  }
+  static void add_choice(CLI::App* sub, const char* name, std::string& value,
+                         const std::vector<std::string>& words, const char* what) {
+    std::string type;
+    for (const std::string& word : words) type += (type.empty() ? "" : "|") + word;
+    sub->add_option(name, value, what)
+        ->check(CLI::IsMember(words).description(""))
+        ->type_name(type);
   }
   void add_line_file(CLI::App* sub) {
     sub->add_option("file", options.file, "Line file (TOML)")->required();
@@ -73,24 +83,21 @@ Parser::Parser() {
   CLI::App* check =
       add(app, "check", "Check a line file and print the stream it describes", Command::check);
   add_line_file(check);
+  add_choice(check, "--units", units, {"si", "us"}, "Units of what is printed");
 
   CLI::App* solve = add(app, "solve", "Solve a line and print the answer", Command::solve);
   add_line_file(solve);
-  solve->add_option("--level", options.level, "Detail of the product model: mean (over the depth)")
-      ->check(CLI::IsMember({"mean", "depth"}));
-  solve->add_option("--format", options.format, "text, json, or csv (the profile along the belt)")
-      ->transform(CLI::CheckedTransformer(std::map<std::string, Format>{
-          {"text", Format::text}, {"json", Format::json}, {"csv", Format::csv}}))
-      ->type_name("text|json|csv");
-  solve->add_option("--units", options.units, "Units of the text page: si or us")
-      ->transform(CLI::CheckedTransformer(std::map<std::string, UnitSet>{
-          {"si", UnitSet::si_engineering}, {"us", UnitSet::us_customary}}))
-      ->type_name("si|us");
+  add_choice(solve, "--level", options.level, {"mean", "depth"},
+             "Detail of the product model: mean over its depth");
+  add_choice(solve, "--format", format, {"text", "json", "csv"},
+             "One page, everything for a program, or the profile along the belt");
+  add_choice(solve, "--units", units, {"si", "us"}, "Units of the page");
   solve->add_option("--output", options.output, "Write to this file instead of standard output")
       ->type_name("FILE");
 
   CLI::App* materials = app.add_subcommand("materials", "The materials database");
   materials->require_subcommand(0, 1);
+  materials->footer("");
   add(*materials, "list", "All materials with the grade of what is known", Command::materials_list);
   CLI::App* show =
       add(*materials, "show", "Everything stored about one material", Command::materials_show);
@@ -131,9 +138,12 @@ Options read_options(int argc, const char* const* argv) {
   }
   for (const auto& [sub, command] : parser.commands)
     if (sub->parsed()) options.command = command;
+  if (parser.format != "text")
+    options.format = parser.format == "json" ? Format::json : Format::csv;
+  if (parser.units == "us") options.units = UnitSet::us_customary;
   if (options.command == Command::none) {
     const CLI::App* materials = parser.app.get_subcommand("materials");
-    std::cerr << (materials->parsed() ? materials->help() : parser.app.help());
+    std::cerr << (materials->parsed() ? materials->help("lossline") : parser.app.help());
   }
   return options;
 }

@@ -56,9 +56,10 @@ std::string title(const Page& page) {
   const std::size_t left = static_cast<std::size_t>(page_width) - right.size() - 2;
   std::string out = cut(page.line.name.empty() ? page.file : page.line.name, left) + "  " + right;
   out += '\n';
-  const std::string time = s.status == Status::refused ? std::string()
-                                                       : fmt::format("; {} rounds in {:.0f} ms",
-                                                                     s.rounds, 1e3 * s.wall_time);
+  const std::string time = s.status == Status::refused
+                               ? std::string()
+                               : fmt::format("; {} round{} in {:.0f} ms", s.rounds,
+                                             s.rounds == 1 ? "" : "s", 1e3 * s.wall_time);
   out += wrapped("",
                  fmt::format("{}: {}; {}{}; Lossline {}", page.file, page.line.product.material,
                              installed(page.line), time, s.version),
@@ -192,7 +193,8 @@ std::string text(const Page& page, const Setting& setting) {
   out += '\n' + duty(page, setting) + answer(page, setting);
   out += '\n' + power_section(page, setting);
   out += '\n' + stretch_section(page, setting);
-  if (!page.solution.cavities.empty()) out += '\n' + cavity_section(page, setting);
+  if (!page.solution.cavities.empty() && page.solution.balance == Balance::full)
+    out += '\n' + cavity_section(page, setting);
   if (!page.solution.air.empty()) out += '\n' + air_section(page, setting);
   out += '\n' + margin_section(page, setting);
   out += '\n' + caution_section(page) + evidence_section(page) + closing(page);

@@ -135,7 +135,8 @@ std::string stretch_section(const Page& page, const Setting& set) {
                          in_unit(Shown::temperature, end->temperature, set.units));
     if (const CavityReport* c = cavity_of(s, i))
       row += fmt::format(" {:>9} {:>9} {:>7}% {:>8}", kilowatts(c->launched), kilowatts(c->bed),
-                         percent(c->bed, c->launched), kilowatts(c->returned));
+                         percent(c->bed, c->launched),
+                         s.balance == Balance::full ? kilowatts(c->returned) : "-");
     out += row + '\n';
   }
   if (s.profile.size() > 1) out += traces(page, set);
@@ -144,7 +145,6 @@ std::string stretch_section(const Page& page, const Setting& set) {
 
 std::string cavity_section(const Page& page, const Setting& set) {
   const Solution& s = page.solution;
-  if (s.balance != Balance::full) return "";
   std::string out =
       fmt::format("{:<16} {:>7} {:>12} {:>8} {:>8} {:>8} {:>11} {:>8} {:>10}\n", "Cavity", "MHz",
                   "field, kV/m", "product", "unmixed", "mixed", "uneven", "modes", "hot spots");

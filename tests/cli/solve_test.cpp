@@ -80,6 +80,26 @@ TEST(SolveCommand, SaysOneForABrokenLimitAndStillAnswers) {
   EXPECT_THAT(outcome.out, HasSubstr("! beyond  product temperature"));
 }
 
+TEST(SolveCommand, StampsAConstantShare) {
+  const Outcome outcome =
+      lossline({"solve", scenario("quillfen.toml"), "--set", "solve.balance=constant share"});
+  EXPECT_THAT(outcome.out, HasSubstr("[ CONSTANT SHARE: 85 %"));
+  EXPECT_THAT(outcome.out, HasSubstr("? unknown reflected over output"));
+}
+
+TEST(SolveCommand, NamesWhatAMaterialLacks) {
+  std::string text = content(scenario("velnarrow.toml"));
+  const std::size_t from = text.find("[product.permittivity]"), to = text.find("[belt]");
+  ASSERT_LT(from, to);
+  text.erase(from, to - from);
+  const Folder folder;
+  const Outcome outcome = lossline({"solve", folder.write("lacking.toml", text)});
+  EXPECT_EQ(outcome.code, 2);
+  EXPECT_THAT(outcome.err, HasSubstr("lacking.toml:"));
+  EXPECT_THAT(outcome.err, HasSubstr("'rubber_compound' has no permittivity"));
+  EXPECT_THAT(outcome.out, IsEmpty());
+}
+
 TEST(SolveCommand, WritesToAFileOrSaysThatItCannot) {
   const Folder folder;
   const std::string file = folder.path("answer.json");
