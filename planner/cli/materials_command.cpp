@@ -22,7 +22,7 @@ std::string today() {
 }
 
 std::string user_database() {
-  const std::string path = materials::default_user_database();
+  std::string path = materials::default_user_database();
   if (path.empty())
     throw Error(ErrorKind::not_found,
                 "there is no place for your own materials: set LOSSLINE_USER_MATERIALS to a file");

@@ -13,7 +13,9 @@ std::size_t find_named(const List& list, const std::string& name) {
 }
 
 Vertex add_part(Graph& graph, PartKind kind, const std::string& name, std::size_t index = 0) {
-  return boost::add_vertex(Part{kind, name, index}, graph);
+  const Vertex vertex = boost::add_vertex(graph);
+  graph[vertex] = Part{kind, name, index};
+  return vertex;
 }
 
 void connect(Graph& graph, Vertex from, Vertex to, Link link) {

@@ -203,6 +203,7 @@ std::string json(const Page& page) {
   }
   out["margins"] = margins_json(page);
   out["cautions"] = cautions_json(page);
+  out["not_assessed"] = verdict::not_assessed();
   out["evidence"] = evidence_json(s);
   // A name the user wrote need not be valid UTF-8; the answer must be.
   return out.dump(2, ' ', false, Json::error_handler_t::replace) + '\n';

@@ -168,7 +168,7 @@ std::string cavity_section(const Page& page, const Setting& set) {
   // One caution often holds for all cavities alike: the first one's numbers stand for them.
   for (const auto& [key, cavities] : notes) {
     std::string names, sentence;
-    for (const CavityReport* c : cavities) names += (names.empty() ? "" : ", ") + c->name;
+    for (const CavityReport* c : cavities) names.append(names.empty() ? "" : ", ").append(c->name);
     for (const field::ValidityFlag& flag : cavities.front()->validity)
       if (flag.kind == key.second && flag.grade == key.first) sentence = flag.sentence;
     out += wrapped("  ! ", names + ": " + sentence, 4);

@@ -130,7 +130,12 @@ std::string caution_section(const Page& page) {
   }
   if (!always.empty()) raised += (raised.empty() ? "always " : "; always ") + always;
   if (raised.empty()) raised = "none";
-  return wrapped("Cautions ", raised + ". Wording and deciding documents: --format json", 9);
+  return wrapped("Cautions ",
+                 raised +
+                     "; not assessed C18 C20, explosive areas, machine safety. Wording and "
+                     "deciding documents: "
+                     "--format json",
+                 9);
 }
 
 std::string evidence_section(const Page& page) {

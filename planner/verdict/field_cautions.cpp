@@ -96,7 +96,7 @@ std::optional<double> temperature_limit(const CautionCase& c, double moisture) {
 /// How long the product bears a stopped belt: shortest time along the belt from its state to the
 /// limit there, power on, no evaporation.
 std::string halt_text(const CautionCase& c) {
-  const std::string unknown = "how long the product bears the power is unknown";
+  std::string unknown = "how long the product bears the power is unknown";
   const ProductFlow& flow = c.solution.answer.flow;
   if (!c.card.dry_heat_capacity || !(flow.speed > 0)) return unknown;
   std::optional<double> shortest;

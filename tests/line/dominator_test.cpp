@@ -17,7 +17,8 @@ using namespace part_graph;
 
 bool trap_dominates(const Line& line, const Parts& parts, Vertex room) {
   Graph graph = parts.graph;
-  const Vertex source = boost::add_vertex(Part{PartKind::generator, "all generators", 0}, graph);
+  const Vertex source = boost::add_vertex(graph);
+  graph[source] = {PartKind::generator, "all generators", 0};
   for (std::size_t s = 0; s < line.stretches.size(); ++s)
     for (const Generator& g : line.generators)
       if (g.feeds[0].stretch == line.stretches[s].name)

@@ -21,9 +21,9 @@ TEST(Json, HasEveryKeyOfItsInterface) {
   const nlohmann::json j = parsed(whole);
   const std::pair<const char*, std::vector<const char*>> sections[] = {
       {"",
-       {"format", "status", "reason", "level", "version", "input_sha256", "time_ms", "iterations",
-        "line", "answer", "power", "cavities", "generators", "profile", "air", "balance", "margins",
-        "cautions", "evidence"}},
+       {"format",     "status",  "reason",  "level",    "version",      "input_sha256", "time_ms",
+        "iterations", "line",    "answer",  "power",    "cavities",     "generators",   "profile",
+        "air",        "balance", "margins", "cautions", "not_assessed", "evidence"}},
       {"line", {"name", "length_m", "heated_length_m", "belt_speed_m_per_s", "residence_s"}},
       {"answer",
        {"dry_solids_kg_per_s", "feed_kg_per_s", "product_kg_per_s", "evaporation_kg_per_s",
