@@ -52,6 +52,7 @@ constexpr std::array symbols{
     Symbol{"V", dimension(1, 2, -3, 0, -1), 1, 1, true},
     Symbol{"ohm", dimension(1, 2, -3, 0, -2), 1, 1, true},
     Symbol{"Ω", dimension(1, 2, -3, 0, -2), 1, 1, true},
+    Symbol{"S", dimension(-1, -2, 3, 0, 2), 1, 1, true},
     Symbol{"L", volume, 1, 1000, true},
     Symbol{"CU", dimension(0, 0, 0, 0, 0, 0, 1), 1, 1, true},
     Symbol{"dB", dimension(0, 0, 0, 0, 0, 0, 0, 1), 1, 1, false},
@@ -72,7 +73,7 @@ constexpr std::array symbols{
     Symbol{"BTU", energy, btu, 1, false},
     Symbol{"MMBTU", energy, 1e6 * btu, 1, false},
     Symbol{"kcal", energy, 4186.8, 1, false},
-    Symbol{"hp", power, 550 * foot* pound * 9.80665, 1, false},
+    Symbol{"hp", power, 550 * foot * pound * 9.80665, 1, false},
 };
 
 struct Prefix {
