@@ -8,7 +8,6 @@ namespace {
 
 using ::testing::HasSubstr;
 using ::testing::IsEmpty;
-using ::testing::StartsWith;
 
 TEST(CheckCommand, FindsEveryScenarioSound) {
   for (const auto& file : line_files("scenarios")) {
