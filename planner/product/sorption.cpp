@@ -78,6 +78,7 @@ Sorption Sorption::free_water() {
 }
 
 void Sorption::lay_out(double end, std::size_t cells) {
+  per_reference_ = 1 / reference_temperature_;
   end_ = end;
   step_ = end / static_cast<double>(cells);
   per_step_ = 1 / step_;

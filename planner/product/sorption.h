@@ -80,11 +80,11 @@ class Sorption {
   /// Activity and its derivatives; 1 for X >= moisture_end(), a straight line for X < 0.
   [[nodiscard]] ActivityValue activity(double X, double T) const {
     const Node n = at(X);
-    const double s = clapeyron * (1 / reference_temperature_ - 1 / T);
+    const double per_T = 1 / T, s = clapeyron * (per_reference_ - per_T);
     const double factor = n.q == 0 ? 1 : std::exp(n.q * s);  // wet products bind no heat
     const double a = n.a * factor;
     const ActivityValue straight{a, n.a_slope * factor + a * n.q_slope * s,
-                                 a * n.q * clapeyron / (T * T)};
+                                 a * n.q * clapeyron * per_T * per_T};
     const double over = a - (1 - half_width);
     if (!(over > 0)) return straight;
     if (over >= 2 * half_width) return {1, 0, 0};
@@ -160,7 +160,7 @@ class Sorption {
 
   std::vector<Node> nodes_;  ///< uniform in X from 0 to end_, one more than needed
   double step_ = 1, per_step_ = 1, end_ = 0;
-  double reference_temperature_ = 298.15;
+  double reference_temperature_ = 298.15, per_reference_ = 1 / 298.15;
   double heat_reduction_ = 0;
 };
 
