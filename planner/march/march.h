@@ -22,10 +22,11 @@ namespace lossline {
 /// Choices of one solve.
 struct SolveOptions {
   Level level = Level::mean;
-  double tolerance = 1e-8;           ///< on the iterated quantities, relative
-  double step_tolerance = 1e-6;      ///< of the product's stepper, relative
-  std::size_t cavity_segments = 8;   ///< stations per cavity, less one
-  std::size_t other_segments = 6;    ///< the same for other stretches
+  double tolerance = 1e-7;  ///< on the iterated quantities, relative
+  /// Of the product's stepper, relative. Looser than 1e-6 its noise keeps the rounds from settling.
+  double step_tolerance = 1e-6;
+  std::size_t cavity_segments = 8;  ///< stations per cavity, less one
+  std::size_t other_segments = 6;   ///< the same for other stretches
   int most_rounds = 120;
   bool estimate_band = true;                ///< solve the ends of an estimated permittivity too
   const std::atomic<bool>* stop = nullptr;  ///< set from outside: return what there is

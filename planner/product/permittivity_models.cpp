@@ -68,10 +68,9 @@ class LeafTissue final : public Permittivity {
     check_frequency("leaf tissue", f, model_frequency_min, model_frequency_max);
     Value out{{}, origin_};
     const double wet = wet_basis(std::max(X, 0.0));
-    double m = wet;
-    if (wet < product::leaf_moisture_min) {  // the anchored dry end
+    double m = product::leaf_moisture_min;  // the anchored dry end
+    if (wet < product::leaf_moisture_min) {
       out.flags |= flag::extrapolated;
-      m = product::leaf_moisture_min;
     } else {
       m = held(wet, product::leaf_moisture_min, product::leaf_moisture_max, 0, 0, out.flags);
     }
