@@ -73,7 +73,7 @@ constexpr std::array symbols{
     Symbol{"BTU", energy, btu, 1, false},
     Symbol{"MMBTU", energy, 1e6 * btu, 1, false},
     Symbol{"kcal", energy, 4186.8, 1, false},
-    Symbol{"hp", power, 550 * foot * pound * 9.80665, 1, false},
+    Symbol{"hp", power, 550 * foot* pound * 9.80665, 1, false},
 };
 
 struct Prefix {

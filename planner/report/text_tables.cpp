@@ -171,7 +171,7 @@ std::string cavity_section(const Page& page, const Setting& set) {
     for (const CavityReport* c : cavities) names.append(names.empty() ? "" : ", ").append(c->name);
     for (const field::ValidityFlag& flag : cavities.front()->validity)
       if (flag.kind == key.second && flag.grade == key.first) sentence = flag.sentence;
-    out += wrapped("  ! ", names + ": " + sentence, 4);
+    out += wrapped("  ! ", names.append(": ").append(sentence), 4);
   }
   return out;
 }
