@@ -18,7 +18,6 @@ using test::message_of;
 using ::testing::AllOf;
 using ::testing::EndsWith;
 using ::testing::HasSubstr;
-using ::testing::Not;
 
 std::string opening(const std::string& path) {
   return message_of([&] { (void)Database::open_read_only(path); });

@@ -82,6 +82,7 @@ TEST(PermittivityTable, NeverOvershootsBetweenMonotonicPoints) {
   std::vector<PermittivityPoint> points;
   const std::vector<std::pair<double, double>> step = {
       {0, 0.1}, {0.1, 0.11}, {0.2, 5}, {0.3, 5.1}, {1, 5.2}};
+  points.reserve(step.size());
   for (const auto& [X, loss] : step) points.push_back({915e6, X, 300, {10 * loss, -loss}});
   for (auto& p : points) p.eps = {p.eps.real() + 1, p.eps.imag()};
   const PermittivityTable table(points);
